@@ -1,0 +1,18 @@
+import type { Session, SignedInUser } from '$lib/server/access/sessions';
+
+declare global {
+	namespace App {
+		interface Error {
+			message: string;
+			/** Number to give when asking for help; in the log under the same number. */
+			requestId?: string;
+		}
+		interface Locals {
+			requestId: string;
+			user: SignedInUser | null;
+			session: Session | null;
+		}
+	}
+}
+
+export {};

@@ -1,0 +1,39 @@
+import { z } from 'zod';
+
+const row = z.tuple([z.number().min(-40).max(90), z.number().positive().max(5_256_000)]);
+
+/**
+ * A time that depends on the surface temperature: rows of [°C, minutes] strictly increasing in
+ * temperature; or one number of minutes at any temperature; or `null`, the tin says there is no
+ * limit. An absent time is silent.
+ */
+export const timeTableSchema = z.union([
+	z
+		.array(row)
+		.min(1)
+		.refine((rows) => rows.every((r, i) => i === 0 || r[0] > (rows[i - 1]?.[0] ?? -Infinity)), {
+			error: 'temperatures must rise from row to row'
+		}),
+	z.number().nonnegative().max(5_256_000),
+	z.null()
+]);
+export type TimeTable = z.infer<typeof timeTableSchema>;
+
+/** The times a sheet states, in minutes against surface temperature. */
+export const TIME_NAMES = [
+	'potLife',
+	'induction',
+	'dustFree',
+	'touchDry',
+	'keepDry',
+	'dryToSand',
+	'overcoatMin',
+	'overcoatMax',
+	'launchMin',
+	'launchMax',
+	'coatWithin'
+] as const;
+export type TimeName = (typeof TIME_NAMES)[number];
+
+export const timesSchema = z.partialRecord(z.enum(TIME_NAMES), timeTableSchema);
+export type Times = z.infer<typeof timesSchema>;

@@ -1,0 +1,34 @@
+/** The engine's public face: the only import path for the rest of the house. */
+export * from './vocabulary';
+export { limitsSchema, type Limits } from './coating/limits';
+export { timesSchema, timeTableSchema, TIME_NAMES, type TimeName, type Times, type TimeTable } from './coating/times';
+export { faceSchema, shelterFactorsSchema, shelterSchema, type Face, type Shelter, type ShelterFactors } from './outlook/face';
+export {
+	forecastSchema,
+	hourlySchema,
+	HOURLY_RANGES,
+	HOURLY_VARIABLES,
+	memberSchema,
+	type Forecast,
+	type Hourly,
+	type HourlyVariable,
+	type Member
+} from './outlook/forecast';
+export { looseSandSchema, siteSchema, workHoursSchema, type LooseSand, type Site, type WorkHours } from './outlook/site';
+export { SLOT_SECONDS, type FaceConditions, type SlotGrid, type SlotWeather } from './outlook/slots';
+export { stepSchema, usualErrorsSchema, type Step, type UsualErrors } from './outlook/step';
+export {
+	LIMIT_NAMES,
+	LIMIT_UNITS,
+	ORIGINS,
+	PHASES,
+	type BestHours,
+	type LimitName,
+	type LimitReading,
+	type LimitUnit,
+	type Origin,
+	type Phase,
+	type SlotReading,
+	type StepHours,
+	type Stretch
+} from './outlook/result';

@@ -1,0 +1,90 @@
+import {
+	boolean,
+	date,
+	doublePrecision,
+	index,
+	jsonb,
+	pgTable,
+	primaryKey,
+	text,
+	unique,
+	uuid
+} from 'drizzle-orm/pg-core';
+import { FINISHES, MATERIALS } from '../../../engine';
+import { users } from './people';
+import { stands, yards } from './yard';
+
+/** A boat ashore. `heading` is where the bow points, degrees from north clockwise. */
+export const boats = pgTable(
+	'boats',
+	{
+		id: uuid().primaryKey().defaultRandom(),
+		yardId: uuid()
+			.notNull()
+			.references(() => yards.id, { onDelete: 'cascade' }),
+		standId: uuid().references(() => stands.id, { onDelete: 'set null' }),
+		ownerId: uuid().references(() => users.id, { onDelete: 'set null' }),
+		name: text().notNull(),
+		heading: doublePrecision().notNull(),
+		hauledOn: date({ mode: 'string' }),
+		launchBy: date({ mode: 'string' })
+	},
+	(table) => [index().on(table.yardId), index().on(table.ownerId)]
+);
+export type Boat = typeof boats.$inferSelect;
+
+/** Painters who may see and work on a boat. */
+export const boatPainters = pgTable(
+	'boat_painters',
+	{
+		boatId: uuid()
+			.notNull()
+			.references(() => boats.id, { onDelete: 'cascade' }),
+		userId: uuid()
+			.notNull()
+			.references(() => users.id, { onDelete: 'cascade' })
+	},
+	(table) => [primaryKey({ columns: [table.boatId, table.userId] }), index().on(table.userId)]
+);
+
+export const FACE_NAMES = [
+	'topsides',
+	'bottom',
+	'transom',
+	'deck',
+	'coachroof',
+	'keel',
+	'rudder',
+	'driveLeg',
+	'propeller'
+] as const;
+
+/**
+ * A side of a boat that gets coated. `tilt` in degrees (0 up, 90 upright, 180 down); `bearing` is
+ * where it looks relative to the bow, clockwise, so that it turns with the boat. Null for faces
+ * that look up.
+ */
+export const faces = pgTable(
+	'faces',
+	{
+		id: uuid().primaryKey().defaultRandom(),
+		boatId: uuid()
+			.notNull()
+			.references(() => boats.id, { onDelete: 'cascade' }),
+		name: text({ enum: FACE_NAMES }).notNull(),
+		side: text({ enum: ['port', 'starboard', 'both'] }).notNull(),
+		tilt: doublePrecision().notNull(),
+		bearing: doublePrecision(),
+		material: text({ enum: MATERIALS }).notNull(),
+		finish: text({ enum: FINISHES }).notNull(),
+		solarAbsorptance: doublePrecision().notNull(),
+		emissivity: doublePrecision().notNull(),
+		/** W/m²K and °C; null takes the default of the material. */
+		inside: jsonb().$type<{ u: number; temperature?: number }>(),
+		bothSides: boolean().notNull().default(false),
+		/** m² */
+		area: doublePrecision()
+	},
+	(table) => [unique().on(table.boatId, table.name, table.side)]
+);
+export type FaceRow = typeof faces.$inferSelect;

@@ -1,0 +1,63 @@
+import { index, integer, jsonb, pgTable, primaryKey, text, timestamp, uuid } from 'drizzle-orm/pg-core';
+import type { Hourly, Member } from '../../../engine';
+import { steps } from './jobs';
+import { yards } from './yard';
+
+export const PROVIDERS = ['open-meteo', 'met-norway'] as const;
+export type ProviderName = (typeof PROVIDERS)[number];
+
+/** One forecast as it came, canonical, series as arrays. Never changed once written. */
+export const forecastRuns = pgTable(
+	'forecast_runs',
+	{
+		id: uuid().primaryKey().defaultRandom(),
+		yardId: uuid()
+			.notNull()
+			.references(() => yards.id, { onDelete: 'cascade' }),
+		provider: text({ enum: PROVIDERS }).notNull(),
+		issuedAt: timestamp({ withTimezone: true }).notNull(),
+		fetchedAt: timestamp({ withTimezone: true }).notNull(),
+		hourly: jsonb().$type<Hourly>().notNull(),
+		members: jsonb().$type<Member[]>()
+	},
+	(table) => [index().on(table.yardId, table.fetchedAt.desc())]
+);
+export type ForecastRun = typeof forecastRuns.$inferSelect;
+
+/**
+ * How each provider has answered for a yard: validators for conditional requests, when it may be
+ * asked again, and the last trouble.
+ */
+export const providerStates = pgTable(
+	'provider_states',
+	{
+		yardId: uuid()
+			.notNull()
+			.references(() => yards.id, { onDelete: 'cascade' }),
+		provider: text({ enum: PROVIDERS }).notNull(),
+		etag: text(),
+		lastModified: text(),
+		expiresAt: timestamp({ withTimezone: true }),
+		lastSuccessAt: timestamp({ withTimezone: true }),
+		failures: integer().notNull().default(0),
+		openUntil: timestamp({ withTimezone: true }),
+		/** The last trouble in a sentence a person can read. */
+		trouble: text(),
+		troubleAt: timestamp({ withTimezone: true })
+	},
+	(table) => [primaryKey({ columns: [table.yardId, table.provider] })]
+);
+
+/** Computed hours, keyed by a hash of the engine's whole input and its version. Can be thrown away. */
+export const outlooks = pgTable(
+	'outlooks',
+	{
+		key: text().primaryKey(),
+		stepId: uuid()
+			.notNull()
+			.references(() => steps.id, { onDelete: 'cascade' }),
+		hours: jsonb().notNull(),
+		createdAt: timestamp({ withTimezone: true }).notNull().defaultNow()
+	},
+	(table) => [index().on(table.stepId)]
+);

@@ -1,0 +1,5 @@
+export * from './people';
+export * from './yard';
+export * from './boats';
+export * from './jobs';
+export * from './forecasts';

@@ -1,0 +1,89 @@
+import {
+	boolean,
+	doublePrecision,
+	index,
+	integer,
+	jsonb,
+	pgTable,
+	primaryKey,
+	text,
+	timestamp,
+	unique,
+	uuid
+} from 'drizzle-orm/pg-core';
+import { METHODS, SHELTERS, STEP_KINDS, type Limits, type Times } from '../../../engine';
+import { boats, faces } from './boats';
+import { yards } from './yard';
+
+/** A coating's data sheet. A sample is to be checked against the tin before use. */
+export const sheets = pgTable(
+	'sheets',
+	{
+		id: uuid().primaryKey().defaultRandom(),
+		yardId: uuid()
+			.notNull()
+			.references(() => yards.id, { onDelete: 'cascade' }),
+		name: text().notNull(),
+		version: integer().notNull().default(1),
+		sample: boolean().notNull().default(false),
+		limits: jsonb().$type<Limits>().notNull(),
+		times: jsonb().$type<Times>().notNull(),
+		/** A word for the hazards whose caution stands beside the work. */
+		hazards: text().array().notNull().default([])
+	},
+	(table) => [unique().on(table.yardId, table.name, table.version)]
+);
+export type Sheet = typeof sheets.$inferSelect;
+
+/** A queue of steps on one boat. */
+export const jobs = pgTable(
+	'jobs',
+	{
+		id: uuid().primaryKey().defaultRandom(),
+		boatId: uuid()
+			.notNull()
+			.references(() => boats.id, { onDelete: 'cascade' }),
+		name: text().notNull(),
+		position: integer().notNull()
+	},
+	(table) => [index().on(table.boatId)]
+);
+
+export const STEP_STATES = ['queued', 'underWay', 'curing', 'done', 'dropped'] as const;
+
+/** One step. Limits and times of its own stand over those of its sheet, key by key. */
+export const steps = pgTable(
+	'steps',
+	{
+		id: uuid().primaryKey().defaultRandom(),
+		jobId: uuid()
+			.notNull()
+			.references(() => jobs.id, { onDelete: 'cascade' }),
+		position: integer().notNull(),
+		name: text().notNull(),
+		kind: text({ enum: STEP_KINDS }).notNull(),
+		method: text({ enum: METHODS }).notNull(),
+		durationMinutes: doublePrecision().notNull(),
+		sheetId: uuid().references(() => sheets.id, { onDelete: 'restrict' }),
+		limits: jsonb().$type<Limits>().notNull().default({}),
+		times: jsonb().$type<Times>().notNull().default({}),
+		shelter: text({ enum: SHELTERS }).notNull().default('open'),
+		state: text({ enum: STEP_STATES }).notNull().default('queued'),
+		updatedAt: timestamp({ withTimezone: true }).notNull().defaultNow()
+	},
+	(table) => [index().on(table.jobId, table.position)]
+);
+export type StepRow = typeof steps.$inferSelect;
+
+export const stepFaces = pgTable(
+	'step_faces',
+	{
+		stepId: uuid()
+			.notNull()
+			.references(() => steps.id, { onDelete: 'cascade' }),
+		faceId: uuid()
+			.notNull()
+			.references(() => faces.id, { onDelete: 'cascade' })
+	},
+	(table) => [primaryKey({ columns: [table.stepId, table.faceId] })]
+);

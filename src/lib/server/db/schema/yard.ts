@@ -1,0 +1,71 @@
+import {
+	boolean,
+	doublePrecision,
+	integer,
+	jsonb,
+	pgTable,
+	primaryKey,
+	text,
+	timestamp,
+	unique,
+	uuid
+} from 'drizzle-orm/pg-core';
+import type { LooseSand, WorkHours } from '../../../engine';
+import { users } from './people';
+
+/** The place. Degrees, metres; speeds in m/s at 10 m; hours in the yard's own zone. */
+export const yards = pgTable('yards', {
+	id: uuid().primaryKey().defaultRandom(),
+	slug: text().notNull().unique(),
+	name: text().notNull(),
+	latitude: doublePrecision().notNull(),
+	longitude: doublePrecision().notNull(),
+	elevation: doublePrecision().notNull().default(0),
+	timeZone: text().notNull(),
+	roughness: doublePrecision().notNull().default(0.03),
+	albedo: doublePrecision().notNull().default(0.2),
+	workHours: jsonb().$type<WorkHours>().notNull(),
+	/** Null: nobody has said whether there is loose sand. */
+	looseSand: jsonb().$type<LooseSand>(),
+	liftGust: doublePrecision().notNull().default(12),
+	highWindGust: doublePrecision().notNull().default(14.4),
+	dayRate: doublePrecision(),
+	currency: text().notNull().default('EUR'),
+	/** First choice of forecast; the other stands in when it fails. */
+	forecastProvider: text({ enum: ['open-meteo', 'met-norway'] }).notNull().default('open-meteo'),
+	/** True for the seeded yard, laid anew relative to today while nobody has touched it. */
+	demo: boolean().notNull().default(false),
+	createdAt: timestamp({ withTimezone: true }).notNull().defaultNow()
+});
+export type Yard = typeof yards.$inferSelect;
+
+export const ROLES = ['manager', 'painter', 'owner'] as const;
+export type Role = (typeof ROLES)[number];
+
+export const memberships = pgTable(
+	'memberships',
+	{
+		yardId: uuid()
+			.notNull()
+			.references(() => yards.id, { onDelete: 'cascade' }),
+		userId: uuid()
+			.notNull()
+			.references(() => users.id, { onDelete: 'cascade' }),
+		role: text({ enum: ROLES }).notNull()
+	},
+	(table) => [primaryKey({ columns: [table.yardId, table.userId] })]
+);
+
+/** Where a boat stands. */
+export const stands = pgTable(
+	'stands',
+	{
+		id: uuid().primaryKey().defaultRandom(),
+		yardId: uuid()
+			.notNull()
+			.references(() => yards.id, { onDelete: 'cascade' }),
+		name: text().notNull(),
+		position: integer().notNull()
+	},
+	(table) => [unique().on(table.yardId, table.name)]
+);
