@@ -56,7 +56,7 @@ export default ts.config(
 		files: ['**/*.ts', '**/*.svelte', '**/*.svelte.ts'],
 		languageOptions: {
 			parserOptions: {
-				projectService: { allowDefaultProject: ['*.config.ts'] },
+				projectService: true,
 				extraFileExtensions: ['.svelte']
 			}
 		},

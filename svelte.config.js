@@ -9,6 +9,18 @@ const config = {
 	},
 	kit: {
 		adapter: adapter(),
+		typescript: {
+			config: (config) => ({
+				...config,
+				include: [
+					...config.include,
+					'../fakes/**/*.ts',
+					'../drizzle/**/*.ts',
+					'../drizzle.config.ts',
+					'../tailwind.config.ts'
+				]
+			})
+		},
 		csp: {
 			mode: 'nonce',
 			directives: {
