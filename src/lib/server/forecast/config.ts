@@ -11,6 +11,8 @@ export const forecastConfigSchema = z.object({
 	OPEN_METEO_URL: httpUrl.default('https://api.open-meteo.com'),
 	/** Open-Meteo's ensemble service, without the path. */
 	OPEN_METEO_ENSEMBLE_URL: httpUrl.default('https://ensemble-api.open-meteo.com'),
+	/** Open-Meteo's key of a paid plan; empty for the free service. */
+	OPEN_METEO_KEY: z.string().trim().max(200).default(''),
 	/** MET Norway's Weather API, without the path. */
 	MET_NORWAY_URL: httpUrl.default('https://api.met.no'),
 	/**

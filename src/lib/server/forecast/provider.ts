@@ -13,20 +13,21 @@ export interface Validators {
 	etag: string | null;
 	lastModified: string | null;
 }
+export const NO_VALIDATORS: Validators = { etag: null, lastModified: null };
 
 export interface FetchRequest {
 	place: ForecastPlace;
 	/** UTC epoch seconds. */
 	now: number;
-	/** From the last answer that is still stored; both null when there is none. */
+	/** Of the last answer, while it is still stored. */
 	validators: Validators;
-	/** 1 = ask once, without retrying (a half-open circuit's probe). */
+	/** How often to try; 1 is the probe of a half-open circuit. */
 	attempts: number;
 }
 
 /** A provider's good answer. Instants in UTC epoch seconds. */
 export type FetchAnswer = {
-	/** Not to be asked again before this; null when the provider does not say. */
+	/** Not to be asked again before this; null where the provider does not say. */
 	expiresAt: number | null;
 	validators: Validators;
 } & (
@@ -34,25 +35,14 @@ export type FetchAnswer = {
 	| {
 			kind: 'forecast';
 			forecast: Forecast;
-			/** What is lacking in an otherwise good forecast, in a sentence; null when nothing is. */
+			/** What an otherwise good forecast lacks, in a sentence; null when nothing. */
 			shortfall: string | null;
 	  }
 );
 
-/** Credit as a provider's terms ask, shown beside whatever was made from its data. */
-export interface Attribution {
-	text: string;
-	url: string;
-}
-
 /** One public weather service. */
 export interface Provider {
 	readonly name: ProviderName;
-	/** As a person would name it. */
-	readonly label: string;
-	readonly attribution: Attribution;
-	/** What the free use allows and what paid or heavy use would need, in a sentence. */
-	readonly terms: string;
 	/**
 	 * Asks the service for a place and brings its answer into the canonical form.
 	 *

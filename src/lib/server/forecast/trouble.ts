@@ -4,7 +4,7 @@ export const TROUBLE_CODES = [
 	'unreachable',
 	/** No answer within the time allowed. */
 	'timeout',
-	/** Asked to wait (429), beyond what a refresh can wait for. */
+	/** Asked to wait (429) for longer than a refresh can. */
 	'rateLimited',
 	/** The provider's own fault (5xx). */
 	'providerFault',
@@ -18,7 +18,7 @@ export const TROUBLE_CODES = [
 	'wrongFormat',
 	/** Declares another unit than was asked for. */
 	'wrongUnits',
-	/** Hours out of order, doubled, or not on the hour. */
+	/** Hours out of order, doubled, not on the hour, or not in UTC. */
 	'badTimes',
 	/** A series shorter or longer than its hours. */
 	'wrongLength',
@@ -38,11 +38,19 @@ export type TroubleCode = (typeof TROUBLE_CODES)[number];
  * the provider and what is wrong.
  */
 export class ForecastTrouble extends Error {
-	readonly code: TroubleCode;
+	override readonly name = 'ForecastTrouble';
 
-	constructor(code: TroubleCode, sentence: string, options?: ErrorOptions) {
+	/**
+	 * @param code - for the program
+	 * @param sentence - for a person
+	 * @param retryAt - UTC epoch seconds before which the provider asked not to be asked again
+	 */
+	constructor(
+		readonly code: TroubleCode,
+		sentence: string,
+		readonly retryAt: number | null = null,
+		options?: ErrorOptions
+	) {
 		super(sentence, options);
-		this.name = 'ForecastTrouble';
-		this.code = code;
 	}
 }
