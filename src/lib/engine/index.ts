@@ -32,3 +32,22 @@ export {
 	type StepHours,
 	type Stretch
 } from './outlook/result';
+
+export { cureClock, finishPosition, finishSlots, type CureClock } from './coating/cure';
+export { minutesAt, type ClockSide } from './coating/curve';
+export { MATERIAL_DEFAULTS, RUN_OFF_DEPTH, WET_FILM } from './met/materials';
+export { localDate, localDays, nights, type LocalDay } from './outlook/calendar';
+export { faceConditions } from './outlook/conditions';
+export { DEFAULT_USUAL_ERRORS } from './outlook/errors';
+export { flagBit, flagNames } from './outlook/flags';
+export { slotReading } from './outlook/reading';
+export { SHELTER_FACTORS } from './outlook/shelter';
+export {
+	durationSlotsOf,
+	ENGINE_VERSION,
+	runsOf,
+	stepHours,
+	type HoursOptions,
+	type HoursRun
+} from './outlook/stepHours';
+export { missingVariables, slotGrid, slotWeather, standardPressure, VARIABLE } from './outlook/weather';

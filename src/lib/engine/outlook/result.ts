@@ -50,6 +50,8 @@ export interface LimitReading {
 	/** The word this limit shuts with. */
 	readonly limiter: Limiter;
 	readonly phase: Phase;
+	/** Which of the conditions given binds. */
+	readonly faceIndex: number;
 	/** The value in the limit's own unit; null when missing; a boolean limit has null and `holds`. */
 	readonly value: number | null;
 	/** What it is held against, in the same unit; null where in or out. */

@@ -44,6 +44,12 @@ export interface SlotWeather {
 	/** Degrees at the middle of the slot; azimuth from north clockwise. */
 	readonly sunAltitude: Float64Array;
 	readonly sunAzimuth: Float64Array;
+	/** hPa */
+	readonly vapourPressure: Float64Array;
+	/** W/m² of long wave down from the whole open sky */
+	readonly skyLongwave: Float64Array;
+	/** 1 where the gust is worked out from the mean. */
+	readonly gustDerived: Uint8Array;
 	/** Bits of SLOT_FLAGS. */
 	readonly flags: Uint8Array;
 	/** Codes of SAND_STATES (255 unknown); gust threshold of lifting at 10 m, m/s. */

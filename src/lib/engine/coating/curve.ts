@@ -1,0 +1,75 @@
+import type { TimeTable } from './times';
+
+const KELVIN = 273.15;
+/** How far outside its rows a table is carried along the end segment's slope, K. */
+const REACH = 5;
+
+/** Which end of a window a clock counts to. Each takes the safe side outside the rows. */
+export type ClockSide = 'earliest' | 'latest';
+
+/** A time table ready for use: ln τ is linear in 1/T between the rows (Arrhenius). */
+export interface TimeCurve {
+	/** Kelvin of the rows, rising. */
+	readonly kelvin: readonly number[];
+	/** ln of minutes at the rows. */
+	readonly logMinutes: readonly number[];
+}
+
+/** The curve of a table with rows; a constant becomes a single row. Null: the tin sets no limit. */
+export function timeCurve(table: Exclude<TimeTable, null>): TimeCurve {
+	const rows: readonly (readonly [number, number])[] =
+		typeof table === 'number' ? [[20, table]] : table;
+	return {
+		kelvin: rows.map(([temperature]) => temperature + KELVIN),
+		logMinutes: rows.map(([, minutes]) => Math.log(minutes))
+	};
+}
+
+const interpolate = (curve: TimeCurve, segment: number, kelvin: number): number => {
+	const t0 = curve.kelvin[segment];
+	const t1 = curve.kelvin[segment + 1];
+	const l0 = curve.logMinutes[segment];
+	const l1 = curve.logMinutes[segment + 1];
+	return l0 + ((l1 - l0) * (1 / kelvin - 1 / t0)) / (1 / t1 - 1 / t0);
+};
+
+/**
+ * Natural logarithm of the minutes at a temperature (°C); +Infinity where the clock stands still.
+ *
+ * Outside the rows the end segment's slope holds for 5 K. Hotter: earliest clocks keep the value
+ * at +5 K, latest clocks go on along the slope. Colder: earliest clocks stand still, latest clocks
+ * keep the value at −5 K. Each is the safe side.
+ */
+export function logMinutesAt(curve: TimeCurve, temperature: number, side: ClockSide): number {
+	const { kelvin, logMinutes } = curve;
+	const last = kelvin.length - 1;
+	if (last === 0) return logMinutes[0];
+	const t = temperature + KELVIN;
+	if (t < kelvin[0]) {
+		if (t >= kelvin[0] - REACH) return interpolate(curve, 0, t);
+		return side === 'earliest' ? Infinity : interpolate(curve, 0, kelvin[0] - REACH);
+	}
+	if (t > kelvin[last]) {
+		const capped = side === 'earliest' ? Math.min(t, kelvin[last] + REACH) : t;
+		return interpolate(curve, last - 1, capped);
+	}
+	let segment = 0;
+	while (segment < last - 1 && t > kelvin[segment + 1]) segment++;
+	return interpolate(curve, segment, t);
+}
+
+/** Minutes at a constant temperature (°C); Infinity where the clock stands still. */
+export function minutesAt(
+	table: Exclude<TimeTable, null>,
+	temperature: number,
+	side: ClockSide
+): number {
+	return Math.exp(logMinutesAt(timeCurve(table), temperature, side));
+}
+
+/** True where a temperature lies outside the rows of a table with more than one. */
+export function outsideRows(curve: TimeCurve, temperature: number): boolean {
+	const last = curve.kelvin.length - 1;
+	const t = temperature + KELVIN;
+	return last > 0 && (t < curve.kelvin[0] || t > curve.kelvin[last]);
+}

@@ -1,0 +1,152 @@
+import { WET_FILM } from '../met/materials';
+import { SLOT_SECONDS, type SlotWeather } from './slots';
+
+/**
+ * Scaled rooms per slot of the limits that are not a plain distance to a number. 1 is one usual
+ * error, at most {@link MOST_ROOM}; negative is broken, NaN unknown.
+ */
+
+/** Rooms over this are all alike. */
+export const MOST_ROOM = 3;
+/** Room of a limit that is broken and has no distance. */
+export const BROKEN = -1;
+
+const HOURS_PER_SLOT = SLOT_SECONDS / 3600;
+/** An hour with this much rain is wet, mm; a chance from this on shuts, %. */
+export const WET_HOUR = 0.1;
+export const SHUT_CHANCE = 50;
+const CHANCE_SCALE = 25;
+const RAIN_HOURS_SCALE = 3;
+/** Direct sun counts from this much beam on the face, W/m². */
+export const DIRECT_SUN = 20;
+const TREND_SLOTS = 3600 / SLOT_SECONDS;
+
+export interface RoomSeries {
+	readonly value: Float64Array;
+	readonly scaled: Float64Array;
+}
+
+/** Hours from each slot's start to the nearest wet hour, before or after; +Infinity without one. */
+function hoursToRain(hourly: Float64Array): Float64Array {
+	const out = new Float64Array(hourly.length).fill(Infinity);
+	let distance = Infinity;
+	for (let i = 0; i < hourly.length; i++) {
+		distance = hourly[i] >= WET_HOUR ? 0 : distance + HOURS_PER_SLOT;
+		out[i] = Math.max(0, distance - HOURS_PER_SLOT);
+	}
+	distance = Infinity;
+	for (let i = hourly.length - 1; i >= 0; i--) {
+		distance = hourly[i] >= WET_HOUR ? 0 : distance + HOURS_PER_SLOT;
+		if (distance < out[i]) out[i] = distance;
+	}
+	return out;
+}
+
+const rainRooms = new WeakMap<SlotWeather, RoomSeries>();
+
+/**
+ * Rain: broken at 0.1 mm in an hour or a chance of 50 %; else (50 − P)/25, without a chance the
+ * hours to the nearest wet hour over 3. `value` is the chance in %, or mm in the hour without one.
+ */
+export function rainRoom(weather: SlotWeather): RoomSeries {
+	const before = rainRooms.get(weather);
+	if (before !== undefined) return before;
+	const { hourlyPrecipitation, precipitationProbability } = weather;
+	const count = hourlyPrecipitation.length;
+	const value = new Float64Array(count);
+	const scaled = new Float64Array(count);
+	const nearest = hoursToRain(hourlyPrecipitation);
+	for (let i = 0; i < count; i++) {
+		const amount = hourlyPrecipitation[i];
+		const chance = precipitationProbability[i];
+		const chanceKnown = chance === chance;
+		value[i] = amount;
+		if (amount !== amount) scaled[i] = NaN;
+		else if (amount >= WET_HOUR) scaled[i] = BROKEN;
+		else if (chanceKnown) {
+			// At 50 % the room is nought and shut all the same.
+			scaled[i] =
+				chance >= SHUT_CHANCE
+					? Math.min(-0.01, (SHUT_CHANCE - chance) / CHANCE_SCALE)
+					: (SHUT_CHANCE - chance) / CHANCE_SCALE;
+		} else scaled[i] = Math.min(MOST_ROOM, nearest[i] / RAIN_HOURS_SCALE);
+	}
+	const result = { value, scaled };
+	rainRooms.set(weather, result);
+	return result;
+}
+
+/** Film: broken while the face is wet, else the hours since it last was; unknown with the film. */
+export function filmRoom(film: Float64Array): RoomSeries {
+	const scaled = new Float64Array(film.length);
+	let hours = Infinity;
+	for (let i = 0; i < film.length; i++) {
+		const depth = film[i];
+		if (depth !== depth) {
+			scaled[i] = NaN;
+			hours = 0;
+		} else if (depth >= WET_FILM) {
+			scaled[i] = BROKEN;
+			hours = 0;
+		} else {
+			hours += HOURS_PER_SLOT;
+			scaled[i] = Math.min(MOST_ROOM, hours);
+		}
+	}
+	return { value: film, scaled };
+}
+
+/** Direct sun on the face: in or out. */
+export function directSunRoom(beam: Float64Array): RoomSeries {
+	const scaled = new Float64Array(beam.length);
+	for (let i = 0; i < beam.length; i++) {
+		const light = beam[i];
+		scaled[i] = light !== light ? NaN : light > DIRECT_SUN ? BROKEN : MOST_ROOM;
+	}
+	return { value: beam, scaled };
+}
+
+/** Trend of the shaded face against an hour before, K/h: in or out. */
+export function trendRoom(surface: Float64Array, asked: 'falling' | 'rising'): RoomSeries {
+	const value = new Float64Array(surface.length).fill(NaN);
+	const scaled = new Float64Array(surface.length).fill(NaN);
+	for (let i = TREND_SLOTS; i < surface.length; i++) {
+		const change = surface[i] - surface[i - TREND_SLOTS];
+		value[i] = change;
+		if (change === change)
+			scaled[i] = (asked === 'falling' ? change <= 0 : change >= 0) ? MOST_ROOM : BROKEN;
+	}
+	return { value, scaled };
+}
+
+/** A mask of slots that are in (1) or out. */
+export function maskRoom(mask: Uint8Array): RoomSeries {
+	const scaled = Float64Array.from(mask, (inside) => (inside ? MOST_ROOM : BROKEN));
+	return { value: scaled, scaled };
+}
+
+/** Distance to a bound in usual errors; `side` says whether the bound is the least or the most. */
+export function distanceRoom(
+	value: Float64Array,
+	bound: number,
+	side: 'least' | 'most',
+	error: Float64Array
+): RoomSeries {
+	const scaled = new Float64Array(value.length);
+	const sign = side === 'least' ? 1 : -1;
+	for (let i = 0; i < value.length; i++) {
+		const room = (sign * (value[i] - bound)) / error[i];
+		scaled[i] = room > MOST_ROOM ? MOST_ROOM : room;
+	}
+	return { value, scaled };
+}
+
+/** Distance of the gust below the gust that lifts sand; `value` is the gust, bounds differ by slot. */
+export function sandRoom(weather: SlotWeather, error: Float64Array): RoomSeries {
+	const scaled = new Float64Array(error.length);
+	for (let i = 0; i < error.length; i++) {
+		const room = (weather.sandLiftGust[i] - weather.windGust[i]) / error[i];
+		scaled[i] = room > MOST_ROOM ? MOST_ROOM : room;
+	}
+	return { value: weather.windGust, scaled };
+}
