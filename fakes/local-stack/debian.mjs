@@ -39,7 +39,11 @@ async function missingWithDependencies(packages) {
 	const flags = ['recommends', 'suggests', 'conflicts', 'breaks', 'replaces', 'enhances'].map(
 		(kind) => `--no-${kind}`
 	);
-	const { stdout } = await run('apt-cache', ['depends', '--recurse', ...flags, ...packages], LIMITS);
+	const { stdout } = await run(
+		'apt-cache',
+		['depends', '--recurse', ...flags, ...packages],
+		LIMITS
+	);
 	const names = [...new Set(stdout.split('\n').filter((line) => /^[a-z0-9]/.test(line)))].map(
 		(line) => line.trim()
 	);

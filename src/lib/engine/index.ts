@@ -1,8 +1,22 @@
 /** The engine's public face: the only import path for the rest of the house. */
 export * from './vocabulary';
 export { limitsSchema, type Limits } from './coating/limits';
-export { timesSchema, timeTableSchema, TIME_NAMES, type TimeName, type Times, type TimeTable } from './coating/times';
-export { faceSchema, shelterFactorsSchema, shelterSchema, type Face, type Shelter, type ShelterFactors } from './outlook/face';
+export {
+	timesSchema,
+	timeTableSchema,
+	TIME_NAMES,
+	type TimeName,
+	type Times,
+	type TimeTable
+} from './coating/times';
+export {
+	faceSchema,
+	shelterFactorsSchema,
+	shelterSchema,
+	type Face,
+	type Shelter,
+	type ShelterFactors
+} from './outlook/face';
 export {
 	forecastSchema,
 	hourlySchema,
@@ -14,8 +28,20 @@ export {
 	type HourlyVariable,
 	type Member
 } from './outlook/forecast';
-export { looseSandSchema, siteSchema, workHoursSchema, type LooseSand, type Site, type WorkHours } from './outlook/site';
-export { SLOT_SECONDS, type FaceConditions, type SlotGrid, type SlotWeather } from './outlook/slots';
+export {
+	looseSandSchema,
+	siteSchema,
+	workHoursSchema,
+	type LooseSand,
+	type Site,
+	type WorkHours
+} from './outlook/site';
+export {
+	SLOT_SECONDS,
+	type FaceConditions,
+	type SlotGrid,
+	type SlotWeather
+} from './outlook/slots';
 export { stepSchema, usualErrorsSchema, type Step, type UsualErrors } from './outlook/step';
 export {
 	LIMIT_NAMES,
@@ -50,4 +76,10 @@ export {
 	type HoursOptions,
 	type HoursRun
 } from './outlook/stepHours';
-export { missingVariables, slotGrid, slotWeather, standardPressure, VARIABLE } from './outlook/weather';
+export {
+	missingVariables,
+	slotGrid,
+	slotWeather,
+	standardPressure,
+	VARIABLE
+} from './outlook/weather';

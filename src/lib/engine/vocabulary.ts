@@ -67,7 +67,14 @@ export const LIMITERS = [
 export type Limiter = (typeof LIMITERS)[number];
 
 /** Where a slot's numbers came from. Bit i of a slot's flag word is SLOT_FLAGS[i]. */
-export const SLOT_FLAGS = ['derived', 'assumed', 'coarse', 'stale', 'measured', 'noSandStated'] as const;
+export const SLOT_FLAGS = [
+	'derived',
+	'assumed',
+	'coarse',
+	'stale',
+	'measured',
+	'noSandStated'
+] as const;
 export type SlotFlag = (typeof SLOT_FLAGS)[number];
 
 /** What a person must know of a step's hours as a whole. */

@@ -30,7 +30,8 @@ export function cureClock(
 ): CureClock {
 	const count = surfaceTemperature.length;
 	const curve = timeCurve(table);
-	const constantRate = curve.kelvin.length === 1 ? SLOT_MINUTES * Math.exp(-curve.logMinutes[0]) : null;
+	const constantRate =
+		curve.kelvin.length === 1 ? SLOT_MINUTES * Math.exp(-curve.logMinutes[0]) : null;
 	const progress = new Float64Array(count + 1);
 	const unknown = new Int32Array(count + 1);
 	const extrapolated = new Int32Array(count + 1);

@@ -46,9 +46,7 @@ export function vapourPressureFromRelativeHumidity(
 
 /** Relative humidity over water of air at a temperature and dew point, %. */
 export function relativeHumidityFromDewPoint(temperature: number, dewPoint: number): number {
-	return (
-		100 * (saturationPressureOverWater(dewPoint) / saturationPressureOverWater(temperature))
-	);
+	return 100 * (saturationPressureOverWater(dewPoint) / saturationPressureOverWater(temperature));
 }
 
 /** Dew point over water of air at a temperature and relative humidity over water, °C. */

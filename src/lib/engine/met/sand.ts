@@ -52,9 +52,7 @@ export function thresholdFrictionVelocity({
 }): number {
 	const dry =
 		BAGNOLD_CONSTANT *
-		Math.sqrt(
-			((QUARTZ_DENSITY - airDensity) / airDensity) * GRAVITY * (grainDiameter / 1000)
-		);
+		Math.sqrt(((QUARTZ_DENSITY - airDensity) / airDensity) * GRAVITY * (grainDiameter / 1000));
 	return dry * moistureFactor(moisturePercent, clayPercent);
 }
 

@@ -59,8 +59,7 @@ function equatorial(epochSeconds: number, latitude: number, longitude: number): 
 	return { declination, hourAngle };
 }
 
-const wrap = (angle: number): number =>
-	angle - 2 * Math.PI * Math.round(angle / (2 * Math.PI));
+const wrap = (angle: number): number => angle - 2 * Math.PI * Math.round(angle / (2 * Math.PI));
 
 /**
  * Sun track at the middle of each step of a grid, degrees.

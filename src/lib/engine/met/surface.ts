@@ -32,7 +32,11 @@ export function convection(wind2: number): number {
 }
 
 /** Mass transfer coefficient for vapour, m/s, from the heat transfer coefficient (Lewis relation). */
-export function vapourTransfer(heatTransfer: number, temperature: number, pressure: number): number {
+export function vapourTransfer(
+	heatTransfer: number,
+	temperature: number,
+	pressure: number
+): number {
 	const density = (pressure * 100) / (DRY_AIR_GAS_CONSTANT * (temperature + KELVIN));
 	return heatTransfer / (density * AIR_HEAT_CAPACITY * LEWIS_TWO_THIRDS);
 }
@@ -117,8 +121,7 @@ export function heatBalance(
 	return {
 		shortwave: body.solarAbsorptance * shortwave,
 		longwave:
-			body.emissivity *
-			(air.longwave - STEFAN_BOLTZMANN * (surfaceTemperature + KELVIN) ** 4),
+			body.emissivity * (air.longwave - STEFAN_BOLTZMANN * (surfaceTemperature + KELVIN) ** 4),
 		convection: air.heatTransfer * (air.airTemperature - surfaceTemperature),
 		inside: body.insideU * (air.insideTemperature - surfaceTemperature),
 		latent: (surfaceTemperature < 0 ? SUBLIMATION : VAPORISATION) * condensation,
@@ -159,7 +162,8 @@ function advance(
 		const rain = drive.rain[i];
 		if (film !== null) film[i] = rain === rain ? water : NaN;
 		// Instants at both ends of the slot, meant over it; the last slot has only its start.
-		const next = i < lastSlot && drive.airTemperature[i + 1] === drive.airTemperature[i + 1] ? i + 1 : i;
+		const next =
+			i < lastSlot && drive.airTemperature[i + 1] === drive.airTemperature[i + 1] ? i + 1 : i;
 		const air = 0.5 * (drive.airTemperature[i] + drive.airTemperature[next]);
 		const vapour = 0.5 * (drive.vapourDensity[i] + drive.vapourDensity[next]);
 		const settles = 0.5 * (drive.condensationPoint[i] + drive.condensationPoint[next]);
@@ -176,7 +180,8 @@ function advance(
 			const behind = twoNodes ? core : inside;
 			// Emission linearised about the present temperature: σT⁴ + 4σT³(T′ − T).
 			const slope = capacityRate + 4 * cubed + h + frontU;
-			let source = capacityRate * surface + gain - cubed * kelvin + 4 * cubed * surface + frontU * behind;
+			let source =
+				capacityRate * surface + gain - cubed * kelvin + 4 * cubed * surface + frontU * behind;
 			let condensed = 0;
 			if ((water > 0 || surface < settles) && !dry) {
 				const saturation = saturationDensity(surface);
@@ -188,8 +193,7 @@ function advance(
 				const saturationSlope = saturation * (rise - 1 / kelvin);
 				const latent = frozen ? SUBLIMATION : VAPORISATION;
 				const wetSlope = slope + latent * k * saturationSlope;
-				const wetSource =
-					source + latent * k * (vapour - saturation + saturationSlope * surface);
+				const wetSource = source + latent * k * (vapour - saturation + saturationSlope * surface);
 				const wetSurface = wetSource / wetSlope;
 				condensed = k * (vapour - saturation - saturationSlope * (wetSurface - surface)) * dt;
 				// Evaporation ends with the film: no more heat leaves than the water there can carry.

@@ -63,7 +63,10 @@ function markWhole(grid: SlotGrid, spans: readonly TimeSpan[], mask: Uint8Array)
 }
 
 /** 1 for slots with daylight at both ends. */
-export function daylightMask(site: Pick<Site, 'latitude' | 'longitude'>, grid: SlotGrid): Uint8Array {
+export function daylightMask(
+	site: Pick<Site, 'latitude' | 'longitude'>,
+	grid: SlotGrid
+): Uint8Array {
 	const mask = new Uint8Array(grid.count);
 	const end = grid.start + grid.count * SLOT_SECONDS;
 	// A margin on both sides, so that a span cut by the grid is not cut at its edge slots.

@@ -110,6 +110,7 @@ export function faceConditions(
 	face: Face,
 	shelter: Shelter
 ): FaceConditions[] {
-	const sides = face.bothSides === true ? [face.azimuth, (face.azimuth + 180) % 360] : [face.azimuth];
+	const sides =
+		face.bothSides === true ? [face.azimuth, (face.azimuth + 180) % 360] : [face.azimuth];
 	return sides.map((azimuth) => conditionsOfSide(weather, site, face, azimuth, shelter));
 }

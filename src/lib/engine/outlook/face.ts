@@ -18,7 +18,10 @@ export const faceSchema = z
 		material: z.enum(MATERIALS).optional(),
 		finish: z.enum(FINISHES).optional(),
 		inside: z
-			.strictObject({ u: z.number().min(0).max(50), temperature: z.number().min(-40).max(60).optional() })
+			.strictObject({
+				u: z.number().min(0).max(50),
+				temperature: z.number().min(-40).max(60).optional()
+			})
 			.optional(),
 		/** Two-sided parts (rudder, keel, drive leg, propeller): both sides are run, the worse binds. */
 		bothSides: z.boolean().optional()

@@ -61,7 +61,8 @@ export const forecastSchema = z
 		if (time.length < 2) refuse(['hourly', 'time'], 'fewer than two hours');
 		time.forEach((t, i) => {
 			if (t % 3600 !== 0) refuse(['hourly', 'time', i], 'is not on a whole hour');
-			if (i > 0 && t <= (time[i - 1] ?? 0)) refuse(['hourly', 'time', i], 'is not after the hour before it');
+			if (i > 0 && t <= (time[i - 1] ?? 0))
+				refuse(['hourly', 'time', i], 'is not after the hour before it');
 		});
 		const check = (values: Member, path: (string | number)[]) => {
 			for (const name of HOURLY_VARIABLES) {

@@ -104,7 +104,10 @@ export function limiterAt(track: LimitTrack, slot: number): number {
  * Draws the tracks together. Limiter: a value missing in the slot itself, then hours, dark, then
  * the least scaled room, and last what lies past the forecast's end or in a gap ahead.
  */
-export function slotStates(judgement: Judgement, conditions: readonly FaceConditions[]): SlotStates {
+export function slotStates(
+	judgement: Judgement,
+	conditions: readonly FaceConditions[]
+): SlotStates {
 	const { count } = judgement.grid;
 	const { weather } = conditions[0];
 	const state = new Uint8Array(count);

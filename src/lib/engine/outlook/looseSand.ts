@@ -71,7 +71,8 @@ export function looseSandSlots(
 			clayPercent: looseSand.clayPercent
 		});
 		sandLiftGust[i] = direction === direction ? windOfFrictionVelocity(threshold) : NaN;
-		if (sandLiftGust[i] !== sandLiftGust[i] || air.windGust[i] !== air.windGust[i]) sand[i] = UNKNOWN;
+		if (sandLiftGust[i] !== sandLiftGust[i] || air.windGust[i] !== air.windGust[i])
+			sand[i] = UNKNOWN;
 		else if (frictionVelocity(air.windSpeed[i]) > threshold) sand[i] = BLOWING;
 		else if (air.windGust[i] > sandLiftGust[i]) sand[i] = LIFTING;
 	}

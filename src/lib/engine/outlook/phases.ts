@@ -33,7 +33,8 @@ function clockWindow(step: Step, name: TimeName, face: FaceConditions): ClockWin
 	if (table === undefined) return null;
 	const { count } = face.weather.grid;
 	// The tin sets no limit: done at once.
-	if (table === null) return { ends: Int32Array.from({ length: count }, (_, i) => i + 1), clock: null };
+	if (table === null)
+		return { ends: Int32Array.from({ length: count }, (_, i) => i + 1), clock: null };
 	// Earliest clocks run on the coldest spot.
 	const clock = cureClock(table, face.surfaceShaded, 'earliest', step.limits.curing?.min);
 	return { ends: finishSlots(clock).subarray(1), clock };
@@ -65,7 +66,10 @@ export function phaseTracks(
 	const tracks: LimitTrack[] = [];
 	const clip = (ends: Int32Array): Int32Array => ends.map((end) => Math.min(end, knownTo));
 	const windowed = (
-		name: Pick<LimitTrack, 'limit' | 'phase' | 'side' | 'unit' | 'bound' | 'error' | 'freezes' | 'modelled'>,
+		name: Pick<
+			LimitTrack,
+			'limit' | 'phase' | 'side' | 'unit' | 'bound' | 'error' | 'freezes' | 'modelled'
+		>,
 		limiter: Parameters<typeof limiterCode>[0],
 		base: RoomSeries,
 		ends: Int32Array
@@ -86,28 +90,74 @@ export function phaseTracks(
 	const wet = { phase: 'wet', error: null, freezes: null, modelled: false } as const;
 	const drying = touch !== null || keep !== null;
 	if (drying && limits.rainFree === true && face.rainReaches) {
-		windowed({ ...wet, limit: 'rain', side: 'most', unit: 'millimetres', bound: null }, 'rain', rainRoom(face.weather), wetEnds);
+		windowed(
+			{ ...wet, limit: 'rain', side: 'most', unit: 'millimetres', bound: null },
+			'rain',
+			rainRoom(face.weather),
+			wetEnds
+		);
 	}
 	if (drying && (limits.rainFree === true || limits.drySurface === true)) {
 		const frozen = { ...wet, freezes: face.surfaceShaded, modelled: true };
-		windowed({ ...frozen, limit: 'film', side: 'most', unit: 'millimetres', bound: null }, 'wet', filmRoom(face.film), wetEnds);
+		windowed(
+			{ ...frozen, limit: 'film', side: 'most', unit: 'millimetres', bound: null },
+			'wet',
+			filmRoom(face.film),
+			wetEnds
+		);
 	}
 	if (drying && limits.sand === 'none' && face.dustReaches && face.weather.sandStated) {
 		const gust = { ...wet, error: errors.gust, modelled: true };
-		windowed({ ...gust, limit: 'sand', side: 'most', unit: 'metresPerSecond', bound: face.weather.sandLiftGust }, 'sand', sandRoom(face.weather, errors.gust), touchEnds);
+		windowed(
+			{
+				...gust,
+				limit: 'sand',
+				side: 'most',
+				unit: 'metresPerSecond',
+				bound: face.weather.sandLiftGust
+			},
+			'sand',
+			sandRoom(face.weather, errors.gust),
+			touchEnds
+		);
 	}
 	if (drying && limits.spread !== undefined) {
-		const kelvin = { ...wet, limit: 'spread', side: 'least', unit: 'kelvin', error: errors.spread, modelled: true } as const;
-		windowed({ ...kelvin, bound: 0 }, 'dew', distanceRoom(face.spread, 0, 'least', errors.spread), wetEnds);
+		const kelvin = {
+			...wet,
+			limit: 'spread',
+			side: 'least',
+			unit: 'kelvin',
+			error: errors.spread,
+			modelled: true
+		} as const;
+		windowed(
+			{ ...kelvin, bound: 0 },
+			'dew',
+			distanceRoom(face.spread, 0, 'least', errors.spread),
+			wetEnds
+		);
 		if (limits.spread.untilDry === true) {
 			const { min } = limits.spread;
-			windowed({ ...kelvin, bound: min }, 'dew', distanceRoom(face.spread, min, 'least', errors.spread), touchEnds);
+			windowed(
+				{ ...kelvin, bound: min },
+				'dew',
+				distanceRoom(face.spread, min, 'least', errors.spread),
+				touchEnds
+			);
 		}
 	}
 	if (limits.curing !== undefined && (drying || over !== null)) {
 		const { min } = limits.curing;
 		const base = distanceRoom(face.surfaceShaded, min, 'least', errors.surfaceTemperature);
-		const celsius = { limit: 'curing', side: 'least', unit: 'celsius', bound: min, error: errors.surfaceTemperature, freezes: null, modelled: true } as const;
+		const celsius = {
+			limit: 'curing',
+			side: 'least',
+			unit: 'celsius',
+			bound: min,
+			error: errors.surfaceTemperature,
+			freezes: null,
+			modelled: true
+		} as const;
 		if (drying) windowed({ ...celsius, phase: 'wet' }, 'cold', base, wetEnds);
 		if (over !== null) windowed({ ...celsius, phase: 'set' }, 'cold', base, setEnds);
 	}

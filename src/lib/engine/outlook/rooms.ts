@@ -120,19 +120,72 @@ export function applyTracks(
 	): void => {
 		if (bound === undefined) return;
 		const error = errors[quantity];
-		add({ limit, limiter, side, unit, bound, error, modelled }, distanceRoom(value, bound, side, error));
+		add(
+			{ limit, limiter, side, unit, bound, error, modelled },
+			distanceRoom(value, bound, side, error)
+		);
 	};
 
 	const air = limits.airTemperature;
-	distance('airTemperature', 'cold', 'least', 'celsius', face.airTemperature, air?.min, 'airTemperature');
-	distance('airTemperature', 'hot', 'most', 'celsius', face.airTemperature, air?.max, 'airTemperature');
+	distance(
+		'airTemperature',
+		'cold',
+		'least',
+		'celsius',
+		face.airTemperature,
+		air?.min,
+		'airTemperature'
+	);
+	distance(
+		'airTemperature',
+		'hot',
+		'most',
+		'celsius',
+		face.airTemperature,
+		air?.max,
+		'airTemperature'
+	);
 	const surface = limits.surfaceTemperature;
 	// The coldest and the warmest spot must both be inside.
-	distance('surfaceTemperature', 'cold', 'least', 'celsius', face.surfaceShaded, surface?.min, 'surfaceTemperature', true);
-	distance('surfaceTemperature', 'hot', 'most', 'celsius', face.surfaceSunlit, surface?.max, 'surfaceTemperature', true);
+	distance(
+		'surfaceTemperature',
+		'cold',
+		'least',
+		'celsius',
+		face.surfaceShaded,
+		surface?.min,
+		'surfaceTemperature',
+		true
+	);
+	distance(
+		'surfaceTemperature',
+		'hot',
+		'most',
+		'celsius',
+		face.surfaceSunlit,
+		surface?.max,
+		'surfaceTemperature',
+		true
+	);
 	const humidity = limits.relativeHumidity;
-	distance('relativeHumidity', 'damp', 'most', 'percent', face.relativeHumidity, humidity?.max, 'relativeHumidity');
-	distance('relativeHumidity', 'dry', 'least', 'percent', face.relativeHumidity, humidity?.min, 'relativeHumidity');
+	distance(
+		'relativeHumidity',
+		'damp',
+		'most',
+		'percent',
+		face.relativeHumidity,
+		humidity?.max,
+		'relativeHumidity'
+	);
+	distance(
+		'relativeHumidity',
+		'dry',
+		'least',
+		'percent',
+		face.relativeHumidity,
+		humidity?.min,
+		'relativeHumidity'
+	);
 	distance('spread', 'dew', 'least', 'kelvin', face.spread, limits.spread?.min, 'spread', true);
 	if (limits.wind !== undefined || limits.gust !== undefined) {
 		const wind = workWind(face, site, limits.windHeight);

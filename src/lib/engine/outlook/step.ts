@@ -8,7 +8,10 @@ import { workHoursSchema } from './site';
 export const stepSchema = z.strictObject({
 	name: z.string().max(200),
 	kind: z.enum(STEP_KINDS),
-	durationMinutes: z.number().positive().max(14 * 1440),
+	durationMinutes: z
+		.number()
+		.positive()
+		.max(14 * 1440),
 	method: z.enum(METHODS),
 	workHours: workHoursSchema.optional(),
 	limits: limitsSchema,

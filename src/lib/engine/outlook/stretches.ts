@@ -53,7 +53,8 @@ export function stretchesOf(
 		const lastStart = to - durationSlots;
 		if (lastStart >= i) {
 			let bestStart = i;
-			for (let s = i + 1; s <= lastStart; s++) if (leastRoom[s] > leastRoom[bestStart]) bestStart = s;
+			for (let s = i + 1; s <= lastStart; s++)
+				if (leastRoom[s] > leastRoom[bestStart]) bestStart = s;
 			const stretchRoom = leastRoom[bestStart];
 			stretches.push({ from: i, to, lastStart, bestStart, room: stretchRoom });
 			if (best === null || stretchRoom > best.room) {

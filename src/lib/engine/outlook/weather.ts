@@ -1,7 +1,4 @@
-import {
-	dewPointFromRelativeHumidity,
-	saturationPressureOverWater
-} from '../met/humidity';
+import { dewPointFromRelativeHumidity, saturationPressureOverWater } from '../met/humidity';
 import { skyLongwave } from '../met/longwave';
 import { sunTrack } from '../met/sun';
 import { flagBit } from './flags';
@@ -92,14 +89,12 @@ export function slotWeather(input: SlotWeatherInput): SlotWeather {
 	const gusts = valuesOf(hourly, 'windGust');
 	const windGust = gusts === null ? unknown() : heldSlots(gusts, periods, grid);
 	const directions = valuesOf(hourly, 'windDirection');
-	const windDirection =
-		directions === null ? unknown() : directionSlots(directions, periods, grid);
+	const windDirection = directions === null ? unknown() : directionSlots(directions, periods, grid);
 	const amounts = valuesOf(hourly, 'precipitation');
 	const hourlyPrecipitation =
 		amounts === null ? unknown() : hourlyAmountSlots(amounts, periods, grid);
 	const chances = valuesOf(hourly, 'precipitationProbability');
-	const precipitationProbability =
-		chances === null ? unknown() : heldSlots(chances, periods, grid);
+	const precipitationProbability = chances === null ? unknown() : heldSlots(chances, periods, grid);
 
 	const flags = new Uint8Array(count);
 	const gustDerived = new Uint8Array(count);
@@ -168,7 +163,11 @@ export function slotWeather(input: SlotWeatherInput): SlotWeather {
 		knownFrom: slotOf(firstHour),
 		knownTo: slotOf(lastHour)
 	};
-	return { ...open, ...looseSandSlots(open, looseSand, site.roughness), sandStated: looseSand !== null };
+	return {
+		...open,
+		...looseSandSlots(open, looseSand, site.roughness),
+		sandStated: looseSand !== null
+	};
 }
 
 const NEEDED = [

@@ -1,0 +1,19 @@
+import type { ServerInit } from '@sveltejs/kit';
+import { building } from '$app/environment';
+import { env } from '$env/dynamic/private';
+import { composeWeb } from '$lib/server/composition';
+import { failure } from '$lib/server/hooks/failure';
+import { jsonOrigin } from '$lib/server/hooks/jsonOrigin';
+import { requestId } from '$lib/server/hooks/requestId';
+import { securityHeaders } from '$lib/server/hooks/securityHeaders';
+import { session } from '$lib/server/hooks/session';
+import { sequence } from '@sveltejs/kit/hooks';
+
+export const init: ServerInit = () => {
+	if (building) return;
+	const composition = composeWeb(env);
+	process.once('sveltekit:shutdown', () => void composition.close());
+};
+
+export const handle = sequence(requestId, securityHeaders, session, jsonOrigin);
+export const handleError = failure;

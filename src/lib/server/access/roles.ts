@@ -1,0 +1,86 @@
+import { error } from '@sveltejs/kit';
+import { and, eq, exists, sql, type SQL } from 'drizzle-orm';
+import type { Database } from '../db/client';
+import { boatPainters, boats, memberships, yards, type Role, type Yard } from '../db/schema';
+import type { SignedInUser } from './sessions';
+
+/** The one place that decides who may. */
+
+/** A person in a yard, with the role they have there. */
+export interface Membership {
+	readonly user: SignedInUser;
+	readonly yard: Yard;
+	readonly role: Role;
+}
+
+/** What can be asked for, and which roles may. The contributors' guide shows this table. */
+const PERMISSIONS = {
+	/** Open the yard: its hours, weather and what is theirs to see. */
+	see: ['manager', 'painter', 'owner'],
+	/** Ask the forecast provider now instead of at the next hour. */
+	askForecast: ['manager', 'painter', 'owner']
+} as const satisfies Record<string, readonly Role[]>;
+export type Permission = keyof typeof PERMISSIONS;
+
+/** Whether a role may do something. */
+export function mayDo(role: Role, permission: Permission): boolean {
+	return PERMISSIONS[permission].some((allowed) => allowed === role);
+}
+
+/** The signed-in person; answers 401 without one. */
+export function requireUser(locals: { user: SignedInUser | null }): SignedInUser {
+	if (locals.user === null) error(401, 'Sign in first.');
+	return locals.user;
+}
+
+/**
+ * The signed-in person's membership of a yard. A yard that does not exist and one they do not
+ * belong to answer 404 alike.
+ */
+export async function requireMembership(
+	db: Database,
+	locals: { user: SignedInUser | null },
+	slug: string,
+	permission: Permission = 'see'
+): Promise<Membership> {
+	const user = requireUser(locals);
+	const [found] = await db
+		.select({ yard: yards, role: memberships.role })
+		.from(yards)
+		.innerJoin(memberships, eq(memberships.yardId, yards.id))
+		.where(and(eq(yards.slug, slug), eq(memberships.userId, user.id)));
+	if (found === undefined) error(404, 'There is no such yard, or you do not belong to it.');
+	if (!mayDo(found.role, permission)) error(403, 'Your role in this yard does not allow that.');
+	return { user, yard: found.yard, role: found.role };
+}
+
+/** The condition on `boats` that leaves only those a member may see. */
+export function visibleBoats(db: Database, { yard, role, user }: Membership): SQL | undefined {
+	const inYard = eq(boats.yardId, yard.id);
+	switch (role) {
+		case 'manager':
+			return inYard;
+		case 'owner':
+			return and(inYard, eq(boats.ownerId, user.id));
+		case 'painter':
+			return and(
+				inYard,
+				exists(
+					db
+						.select({ one: sql`1` })
+						.from(boatPainters)
+						.where(and(eq(boatPainters.boatId, boats.id), eq(boatPainters.userId, user.id)))
+				)
+			);
+	}
+}
+
+/** The yards of a person, by name. */
+export function yardsOf(db: Database, userId: string) {
+	return db
+		.select({ slug: yards.slug, name: yards.name, role: memberships.role })
+		.from(memberships)
+		.innerJoin(yards, eq(yards.id, memberships.yardId))
+		.where(eq(memberships.userId, userId))
+		.orderBy(yards.name);
+}

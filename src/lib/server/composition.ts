@@ -1,0 +1,43 @@
+import { createSessions, type Sessions } from './access/sessions';
+import { readConfig, type Config } from './config';
+import { createDatabase, type Database } from './db/client';
+import { createLog, type Logger } from './log';
+
+/** What a process is made of; made once at its start, handed to whatever serves a request. */
+export interface Composition {
+	readonly config: Config;
+	readonly db: Database;
+	readonly log: Logger;
+	readonly sessions: Sessions;
+	readonly close: () => Promise<void>;
+}
+
+/** Builds the parts from the environment. Throws ConfigError on a bad value. */
+export function compose(
+	environment: Record<string, string | undefined>,
+	process: 'web' | 'worker'
+): Composition {
+	const config = readConfig(environment);
+	const { db, pool } = createDatabase(config.DATABASE_URL);
+	return {
+		config,
+		db,
+		log: createLog(config.LOG_LEVEL, process),
+		sessions: createSessions(db, { secure: config.ORIGIN.startsWith('https:') }),
+		close: () => pool.end()
+	};
+}
+
+let web: Composition | null = null;
+
+/** Makes the web process's parts; called by the `init` hook, before the first request. */
+export function composeWeb(environment: Record<string, string | undefined>): Composition {
+	web = compose(environment, 'web');
+	return web;
+}
+
+/** The web process's parts. */
+export function parts(): Composition {
+	if (web === null) throw new Error('The web process has not been composed yet.');
+	return web;
+}
