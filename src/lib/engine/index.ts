@@ -83,3 +83,4 @@ export {
 	standardPressure,
 	VARIABLE
 } from './outlook/weather';
+export { FACE_ORIENTATIONS, faceAzimuth, type FaceName } from './outlook/orientation';
