@@ -37,3 +37,8 @@ export const readingSchema = z.object({
 });
 export type Reading = z.infer<typeof readingSchema>;
 export type LimitReadingRow = z.infer<typeof limitReadingSchema>;
+
+/** What a reading is asked with: any instant in the quarter-hour, ISO 8601 with its offset. */
+export const readingQuerySchema = z.object({
+	at: z.iso.datetime({ offset: true, error: 'is not an instant like 2026-05-04T09:45:00Z' })
+});

@@ -84,3 +84,5 @@ export {
 	VARIABLE
 } from './outlook/weather';
 export { FACE_ORIENTATIONS, faceAzimuth, type FaceName } from './outlook/orientation';
+export { stretchesOf } from './outlook/stretches';
+export type { SlotStates } from './outlook/judge';

@@ -34,6 +34,8 @@ export interface StepHours {
 	readonly flags: readonly StepFlag[];
 	/** Slots of a whole duration. */
 	readonly durationSlots: number;
+	/** The sheet states no drying time where one is needed: every hour is shut for it. */
+	readonly silentDrying: boolean;
 }
 
 /** Where a number came from, worst last. */

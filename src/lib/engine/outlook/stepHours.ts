@@ -55,7 +55,8 @@ export function stepHours(
 		...states,
 		...stretchesOf(states, durationSlots, firstStart),
 		flags: stepFlags(judgement, states.state, firstStart),
-		durationSlots
+		durationSlots,
+		silentDrying: judgement.silentDrying
 	};
 }
 

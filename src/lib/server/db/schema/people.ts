@@ -10,8 +10,12 @@ export const users = pgTable(
 		name: text().notNull(),
 		passwordHash: text().notNull(),
 		/** Units this person reads; the engine and the database keep SI. */
-		windUnit: text({ enum: ['m/s', 'kn', 'km/h', 'mph'] }).notNull().default('kn'),
-		temperatureUnit: text({ enum: ['°C', '°F'] }).notNull().default('°C'),
+		windUnit: text({ enum: ['m/s', 'kn', 'km/h', 'mph'] })
+			.notNull()
+			.default('kn'),
+		temperatureUnit: text({ enum: ['°C', '°F'] })
+			.notNull()
+			.default('°C'),
 		createdAt: timestamp({ withTimezone: true }).notNull().defaultNow()
 	},
 	(table) => [uniqueIndex('users_email_lower').on(sql`lower(${table.email})`)]

@@ -32,7 +32,9 @@ export const yards = pgTable('yards', {
 	dayRate: doublePrecision(),
 	currency: text().notNull().default('EUR'),
 	/** First choice of forecast; the other stands in when it fails. */
-	forecastProvider: text({ enum: ['open-meteo', 'met-norway'] }).notNull().default('open-meteo'),
+	forecastProvider: text({ enum: ['open-meteo', 'met-norway'] })
+		.notNull()
+		.default('open-meteo'),
 	/** True for the seeded yard, laid anew relative to today while nobody has touched it. */
 	demo: boolean().notNull().default(false),
 	createdAt: timestamp({ withTimezone: true }).notNull().defaultNow()

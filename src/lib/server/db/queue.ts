@@ -1,0 +1,66 @@
+import { and, asc, eq, inArray } from 'drizzle-orm';
+import { visibleBoats, type Membership } from '../access/roles';
+import type { Database } from './client';
+import { boats, faces, jobs, sheets, stands, stepFaces, steps, type FaceRow } from './schema';
+
+/** A queued step with all that its hours depend on. */
+export type QueuedStep = Awaited<ReturnType<typeof queuedSteps>>[number];
+
+/**
+ * The queued steps of the boats a member may see, by stand, job and order, each with its boat,
+ * sheet and faces. Two queries whatever the number of boats.
+ *
+ * @param only - id of one step to look for
+ */
+export async function queuedSteps(db: Database, membership: Membership, only?: string) {
+	const mine = and(
+		visibleBoats(db, membership),
+		eq(steps.state, 'queued'),
+		only === undefined ? undefined : eq(steps.id, only)
+	);
+	const rows = await db
+		.select({
+			step: steps,
+			job: { id: jobs.id, name: jobs.name },
+			boat: { id: boats.id, name: boats.name, heading: boats.heading },
+			stand: stands.name,
+			sheet: sheets
+		})
+		.from(steps)
+		.innerJoin(jobs, eq(jobs.id, steps.jobId))
+		.innerJoin(boats, eq(boats.id, jobs.boatId))
+		.leftJoin(stands, eq(stands.id, boats.standId))
+		.leftJoin(sheets, eq(sheets.id, steps.sheetId))
+		.where(mine)
+		.orderBy(
+			asc(stands.position),
+			asc(boats.name),
+			asc(boats.id),
+			asc(jobs.position),
+			asc(steps.position)
+		);
+	if (rows.length === 0) return [];
+	const faceRows = await db
+		.select({ stepId: stepFaces.stepId, face: faces })
+		.from(stepFaces)
+		.innerJoin(faces, eq(faces.id, stepFaces.faceId))
+		.where(
+			inArray(
+				stepFaces.stepId,
+				db
+					.select({ id: steps.id })
+					.from(steps)
+					.innerJoin(jobs, eq(jobs.id, steps.jobId))
+					.innerJoin(boats, eq(boats.id, jobs.boatId))
+					.where(mine)
+			)
+		)
+		.orderBy(asc(faces.name), asc(faces.side));
+	const facesOf = new Map<string, FaceRow[]>();
+	for (const { stepId, face } of faceRows) {
+		const of = facesOf.get(stepId);
+		if (of === undefined) facesOf.set(stepId, [face]);
+		else of.push(face);
+	}
+	return rows.map((row) => ({ ...row, faces: facesOf.get(row.step.id) ?? [] }));
+}
