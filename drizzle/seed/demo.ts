@@ -15,7 +15,7 @@ export const DEMO_YARD = {
 		{ days: [7], from: '08:30', to: '14:00' }
 	],
 	// Dunes along the seaward side.
-	looseSand: { sectors: [{ from: 190, to: 330 }], grainDiameter: 0.25, clayPercent: 1 },
+	looseSand: { sectors: [{ from: 290, to: 350 }], grainDiameter: 0.25, clayPercent: 1 },
 	liftGust: 12,
 	highWindGust: 14.4,
 	dayRate: 34,

@@ -33,7 +33,12 @@ export const readingSchema = z.object({
 	detail: z.string(),
 	missing: z.array(z.string()),
 	limits: z.array(limitReadingSchema),
-	forecast: z.object({ provider: z.string(), issuedAt: z.iso.datetime(), ageMinutes: z.int(), stale: z.boolean() })
+	forecast: z.object({
+		provider: z.string(),
+		issuedAt: z.iso.datetime(),
+		ageMinutes: z.int(),
+		stale: z.boolean()
+	})
 });
 export type Reading = z.infer<typeof readingSchema>;
 export type LimitReadingRow = z.infer<typeof limitReadingSchema>;

@@ -9,7 +9,7 @@ export const LIMITER_WORDS: Record<Limiter, string> = {
 	dew: 'dew',
 	damp: 'damp air',
 	dry: 'dry air',
-	wet: 'wet faces',
+	wet: 'a wet face',
 	frost: 'frost',
 	cold: 'cold',
 	hot: 'heat',

@@ -1,5 +1,4 @@
-import { and, asc, eq, inArray } from 'drizzle-orm';
-import { visibleBoats, type Membership } from '../access/roles';
+import { and, asc, eq, inArray, type SQL } from 'drizzle-orm';
 import type { Database } from './client';
 import { boats, faces, jobs, sheets, stands, stepFaces, steps, type FaceRow } from './schema';
 
@@ -7,14 +6,15 @@ import { boats, faces, jobs, sheets, stands, stepFaces, steps, type FaceRow } fr
 export type QueuedStep = Awaited<ReturnType<typeof queuedSteps>>[number];
 
 /**
- * The queued steps of the boats a member may see, by stand, job and order, each with its boat,
- * sheet and faces. Two queries whatever the number of boats.
+ * The queued steps of some boats, by stand, job and order, each with its boat, sheet and faces.
+ * Two queries whatever the number of boats.
  *
+ * @param which - condition on `boats`
  * @param only - id of one step to look for
  */
-export async function queuedSteps(db: Database, membership: Membership, only?: string) {
+export async function queuedSteps(db: Database, which: SQL | undefined, only?: string) {
 	const mine = and(
-		visibleBoats(db, membership),
+		which,
 		eq(steps.state, 'queued'),
 		only === undefined ? undefined : eq(steps.id, only)
 	);
@@ -64,3 +64,6 @@ export async function queuedSteps(db: Database, membership: Membership, only?: s
 	}
 	return rows.map((row) => ({ ...row, faces: facesOf.get(row.step.id) ?? [] }));
 }
+
+/** Every boat of a yard, for work that no person asks for. */
+export const allBoatsOf = (yardId: string): SQL => eq(boats.yardId, yardId);

@@ -60,7 +60,11 @@ export function invalid(error: ZodError): ApiProblem {
 	);
 	const [first] = errors;
 	const more = errors.length > 1 ? `, and ${errors.length - 1} more` : '';
-	return new ApiProblem(400, `${first?.pointer ?? '/'}: ${first?.detail ?? 'is wrong'}${more}.`, errors);
+	return new ApiProblem(
+		400,
+		`${first?.pointer ?? '/'}: ${first?.detail ?? 'is wrong'}${more}.`,
+		errors
+	);
 }
 
 /**

@@ -1,17 +1,17 @@
 import type { Hours } from '../../api/hours';
-import { SLOT_SECONDS, slotWeather } from '../../engine';
+import { SLOT_SECONDS } from '../../engine';
 import { headline, subline, type SpokenDay } from '../../sentences/headline';
 import { USUAL_UNITS, type Units } from '../../units/quantity';
-import type { Membership } from '../access/roles';
+import { visibleBoats, type Membership } from '../access/roles';
 import type { SignedInUser } from '../access/sessions';
 import type { Database } from '../db/client';
 import { queuedSteps, type QueuedStep } from '../db/queue';
 import { currentForecast } from '../forecast/current';
-import { axisAt, nightSpans, type Axis } from './axis';
+import { nightSpans } from './axis';
 import { bandsOf, emptyBands } from './bands';
-import { siteOf } from './engineInput';
+import { computeOutlook } from './compute';
 import { highWindDayOf, isoAt, pageDays, spokenDayOf, spokenStep, spokenView } from './speech';
-import { conditionsFor, hoursOfSteps, type AxisHours } from './stepHours';
+import { conditionsFor, type AxisHours } from './stepHours';
 
 export const unitsOf = (user: SignedInUser): Units => ({
 	...USUAL_UNITS,
@@ -38,29 +38,11 @@ function groupByBoat(
 export async function hoursOfYard(db: Database, membership: Membership, now: Date): Promise<Hours> {
 	const { yard, user } = membership;
 	const nowSeconds = Math.floor(now.getTime() / 1000);
-	const site = siteOf(yard);
-	const page = axisAt(yard.timeZone, nowSeconds);
 	const [queue, current] = await Promise.all([
-		queuedSteps(db, membership),
+		queuedSteps(db, visibleBoats(db, membership)),
 		currentForecast(db, yard, now)
 	]);
-	const weather =
-		current === null
-			? null
-			: slotWeather({
-					site,
-					forecast: current.forecast,
-					looseSand: yard.looseSand,
-					stale: current.source.stale,
-					from: page.start,
-					to: page.start + page.slotCount * SLOT_SECONDS
-				});
-	const offset = weather === null ? 0 : (page.start - weather.grid.start) / SLOT_SECONDS;
-	const axis: Axis = { ...page, offset };
-	const hours: Map<string, AxisHours> =
-		weather === null || current === null
-			? new Map()
-			: await hoursOfSteps(db, queue, yard, site, weather, current.runId, axis);
+	const { site, axis, weather, hours } = await computeOutlook(db, yard, queue, current, now);
 	const nowSlot = Math.ceil((nowSeconds - axis.start) / SLOT_SECONDS);
 	const hoursOf = (queued: QueuedStep): AxisHours | null => hours.get(queued.step.id) ?? null;
 	const views = new Map(

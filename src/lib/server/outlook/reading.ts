@@ -8,7 +8,7 @@ import {
 } from '../../engine';
 import { readingDetail, readingTitle, type ReadingFacts } from '../../sentences/reading';
 import { quantity, roomQuantity, type Quantity, type Units } from '../../units/quantity';
-import type { Membership } from '../access/roles';
+import { visibleBoats, type Membership } from '../access/roles';
 import type { Database } from '../db/client';
 import { queuedSteps } from '../db/queue';
 import { currentForecast } from '../forecast/current';
@@ -47,7 +47,7 @@ export async function readingOf(
 ): Promise<Reading | null> {
 	const { yard, user } = membership;
 	const [[queued], current] = await Promise.all([
-		queuedSteps(db, membership, stepId),
+		queuedSteps(db, visibleBoats(db, membership), stepId),
 		currentForecast(db, yard, now)
 	]);
 	if (queued === undefined || current === null) return null;

@@ -3,3 +3,4 @@ export * from './yard';
 export * from './boats';
 export * from './jobs';
 export * from './forecasts';
+export * from './workers';
