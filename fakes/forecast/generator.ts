@@ -2,12 +2,16 @@ import { relativeHumidity } from './air';
 import { daysAround, extremes, localDate, type Day } from './days';
 import { smoothNoise } from './noise';
 import { MILD_MEAN, REGIMES, type Regime } from './regimes';
-import { declination, irradiance, sunTimes } from './sun';
+import { clearSky, declination, sunTimes, underCloud, type ClearSky } from './sun';
 import { NO_NUDGE, type HourWeather, type Nudge, type Place, type Weather } from './weather';
 
 const HOUR = 3_600;
 /** Points of an hour at which sun and wind are taken. */
 const STEPS = 6;
+/** Seconds from a stamp to the middle of each part of the hour before it. */
+const BEFORE = Array.from({ length: STEPS }, (_, i) => ((i + 0.5) / STEPS - 1) * HOUR);
+
+const percent = (value: number): number => Math.max(0, Math.min(100, value));
 
 export interface GeneratorOptions {
 	timeZone: string;
@@ -66,13 +70,22 @@ export function generator({ timeZone, anchor, seed, climate }: GeneratorOptions)
 	const wind = (time: number): number =>
 		Math.max(0.2, curve(time, 'wind') * (1 + 0.07 * smoothNoise(time, 2 * HOUR, seed, 1)));
 	const cloud = (time: number): number =>
-		Math.max(0, Math.min(100, curve(time, 'cloud') + 4 * smoothNoise(time, 3 * HOUR, seed, 2)));
+		percent(curve(time, 'cloud') + 4 * smoothNoise(time, 3 * HOUR, seed, 2));
 
 	const suns = new Map<string, DaySun>();
 	function sunsAt(place: Place): DaySun {
 		const key = `${place.latitude} ${place.longitude}`;
 		const known = suns.get(key) ?? daySuns(days, place);
 		suns.set(key, known);
+		return known;
+	}
+
+	const skies = new Map<string, ClearSky[]>();
+	/** The clear sky over the hour before a stamp, the same for every member. */
+	function skiesBefore(time: number, place: Place): ClearSky[] {
+		const key = `${time} ${place.latitude} ${place.longitude}`;
+		const known = skies.get(key) ?? BEFORE.map((offset) => clearSky(time + offset, place));
+		skies.set(key, known);
 		return known;
 	}
 
@@ -83,14 +96,20 @@ export function generator({ timeZone, anchor, seed, climate }: GeneratorOptions)
 		// The dew point follows the season as the air does; air holds no more than it can.
 		const dewPoint = Math.min(temperature, curve(time, 'dew') + season + nudge.dewPoint);
 		const synoptic = time + nudge.early;
-		const before = Array.from({ length: STEPS }, (_, i) => ((i + 0.5) / STEPS - 1) * HOUR);
-		const cloudAt = (t: number) => Math.max(0, Math.min(100, cloud(t) + nudge.cloud));
-		const sun = before.map((offset) =>
-			irradiance(time + offset, place, cloudAt(synoptic + offset) / 100)
-		);
-		const mean = (values: number[]) => values.reduce((sum, v) => sum + v, 0) / values.length;
-		const strongest = Math.max(wind(synoptic), ...before.map((offset) => wind(synoptic + offset)));
-		const rain = mean(before.map((offset) => curve(synoptic + offset, 'rain'))) * nudge.rain;
+		const sky = skiesBefore(time, place);
+		let strongest = wind(synoptic);
+		let rain = 0;
+		const sun = { ghi: 0, dni: 0, dhi: 0 };
+		for (let i = 0; i < STEPS; i++) {
+			const then = synoptic + BEFORE[i];
+			strongest = Math.max(strongest, wind(then));
+			rain += (curve(then, 'rain') * nudge.rain) / STEPS;
+			if (sky[i].cosine === 0) continue;
+			const { ghi, dni, dhi } = underCloud(sky[i], percent(cloud(then) + nudge.cloud) / 100);
+			sun.ghi += ghi / STEPS;
+			sun.dni += dni / STEPS;
+			sun.dhi += dhi / STEPS;
+		}
 		return {
 			temperature,
 			dewPoint,
@@ -102,10 +121,8 @@ export function generator({ timeZone, anchor, seed, climate }: GeneratorOptions)
 			// What would not wet a gauge is no rain.
 			precipitation: rain < 0.05 ? 0 : rain,
 			precipitationProbability: curve(synoptic, 'chance'),
-			cloudCover: cloudAt(synoptic),
-			ghi: mean(sun.map(({ ghi }) => ghi)),
-			dni: mean(sun.map(({ dni }) => dni)),
-			dhi: mean(sun.map(({ dhi }) => dhi))
+			cloudCover: percent(cloud(synoptic) + nudge.cloud),
+			...sun
 		};
 	}
 	return { hour };

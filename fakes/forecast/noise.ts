@@ -11,11 +11,10 @@ export function hash(...numbers: number[]): number {
 	return ((h ^ (h >>> 16)) >>> 0) / 2 ** 32;
 }
 
-/** About normal with mean 0 and deviation 1 (sum of twelve uniforms), within ±6. */
+/** Normal with mean 0 and deviation 1 (Box and Muller 1958), within ±4. */
 export function normal(...numbers: number[]): number {
-	let sum = -6;
-	for (let i = 0; i < 12; i++) sum += hash(i, ...numbers);
-	return sum;
+	const radius = Math.sqrt(-2 * Math.log(1 - hash(1, ...numbers)));
+	return Math.max(-4, Math.min(4, radius * Math.cos(2 * Math.PI * hash(2, ...numbers))));
 }
 
 /**

@@ -10,8 +10,6 @@ const HOUR = 3_600;
 const DAY = 86_400;
 /** Ensemble runs are six hours apart. */
 const RUN = 6 * HOUR;
-/** GEFS: thirty members beside the control. */
-const MEMBERS = 30;
 
 type Value = number | string | null;
 
@@ -35,9 +33,9 @@ interface Run {
 
 const mainRun: Run[] = [{ suffix: '', nudge: () => NO_NUDGE }];
 
-function ensembleRuns(now: number, seed: number): Run[] {
+function ensembleRuns(now: number, { seed, members }: Stage): Run[] {
 	const run = Math.floor(now / RUN) * RUN;
-	return Array.from({ length: MEMBERS + 1 }, (_, member) => ({
+	return Array.from({ length: members + 1 }, (_, member) => ({
 		suffix: member === 0 ? '' : `_member${String(member).padStart(2, '0')}`,
 		nudge: (time) => memberNudge(time, member, run, seed)
 	}));
@@ -52,7 +50,7 @@ function ensembleRuns(now: number, seed: number): Run[] {
 export function answerOpenMeteo(
 	kind: 'forecast' | 'ensemble',
 	query: Query,
-	{ weather, seed }: Stage,
+	stage: Stage,
 	now: number,
 	faults: readonly ActiveFault[]
 ): OpenMeteoAnswer {
@@ -66,7 +64,7 @@ export function answerOpenMeteo(
 	);
 	const place = { latitude: query.latitude, longitude: query.longitude };
 	const elevation = query.elevation ?? 0;
-	const runs = kind === 'forecast' ? mainRun : ensembleRuns(now, seed);
+	const runs = kind === 'forecast' ? mainRun : ensembleRuns(now, stage);
 	const choice = {
 		temperature: query.temperature_unit,
 		wind: find(faults, 'wrongUnits') === undefined ? query.wind_speed_unit : 'kmh',
@@ -87,7 +85,7 @@ export function answerOpenMeteo(
 		}
 	};
 	for (const { suffix, nudge } of runs) {
-		const hours = times.map((t): HourWeather => weather.hour(t, place, nudge(t)));
+		const hours = times.map((t): HourWeather => stage.weather.hour(t, place, nudge(t)));
 		for (const name of query.hourly) {
 			const variable = VARIABLES[name];
 			if (variable === undefined) continue;

@@ -21,8 +21,8 @@ const variables = z
 
 /** Query of both endpoints, with the service's own defaults. */
 const querySchema = z.object({
-	latitude: number('Latitude', -90, 90),
-	longitude: number('Longitude', -180, 180),
+	latitude: number('latitude', -90, 90),
+	longitude: number('longitude', -180, 180),
 	elevation: z.coerce.number().optional(),
 	hourly: variables,
 	temperature_unit: z.enum(['celsius', 'fahrenheit']).default('celsius'),

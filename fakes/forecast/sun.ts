@@ -68,20 +68,30 @@ export interface Irradiance {
 	dhi: number;
 }
 
-/**
- * Irradiance at an instant under a share `cloud` of 0 to 1, W/m². Clear beam by Meinel 1976,
- * I₀·0.7^(AM^0.678), with a tenth of its horizontal part as diffuse; cloud shuts the beam as
- * (1 − n)^1.5 and the whole as 1 − 0.7 n³ (made up, in the range of published fits).
- * GHI = DNI cos z + DHI always holds.
- */
-export function irradiance(time: number, place: Place, cloud: number): Irradiance {
+/** The sun at an instant as it would be without cloud. */
+export interface ClearSky {
+	/** Cosine of the zenith distance, 0 with the sun down. */
+	cosine: number;
+	/** W/m² on a plane square to the beam. */
+	beam: number;
+}
+
+/** Clear beam by Meinel 1976, I₀·0.7^(AM^0.678), air mass by Kasten and Young 1989. */
+export function clearSky(time: number, place: Place): ClearSky {
 	const cosine = cosZenith(time, place);
-	if (cosine <= 0.01) return { ghi: 0, dni: 0, dhi: 0 };
+	if (cosine <= 0.01) return { cosine: 0, beam: 0 };
 	const zenith = Math.acos(cosine) / RAD;
-	// Kasten and Young 1989.
 	const airMass = 1 / (cosine + 0.50572 * (96.07995 - zenith) ** -1.6364);
-	const clear = SOLAR_CONSTANT * 0.7 ** (airMass ** 0.678);
-	const ghi = 1.1 * clear * cosine * (1 - 0.7 * cloud ** 3);
-	const dni = clear * (1 - cloud) ** 1.5;
+	return { cosine, beam: SOLAR_CONSTANT * 0.7 ** (airMass ** 0.678) };
+}
+
+/**
+ * Irradiance under a share `cloud` of 0 to 1, W/m². A tenth of the beam's horizontal part is
+ * diffuse in a clear sky; cloud shuts the beam as (1 − n)^1.5 and the whole as 1 − 0.7 n³ (made up,
+ * in the range of published fits). GHI = DNI cos z + DHI always holds.
+ */
+export function underCloud({ cosine, beam }: ClearSky, cloud: number): Irradiance {
+	const ghi = 1.1 * beam * cosine * (1 - 0.7 * cloud ** 3);
+	const dni = beam * (1 - cloud) ** 1.5;
 	return { ghi, dni, dhi: ghi - dni * cosine };
 }
