@@ -86,3 +86,4 @@ export {
 export { FACE_ORIENTATIONS, faceAzimuth, type FaceName } from './outlook/orientation';
 export { stretchesOf } from './outlook/stretches';
 export type { SlotStates } from './outlook/judge';
+export { workWind } from './outlook/rooms';

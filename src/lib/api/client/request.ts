@@ -1,3 +1,5 @@
+import type { Problem } from '../problem';
+
 /** A request that did not give what was asked for. */
 export class ApiFailure extends Error {
 	/** HTTP status; null when no answer came at all. */
@@ -13,39 +15,30 @@ export class ApiFailure extends Error {
 	}
 }
 
-/** What of a problem document (RFC 9457) a person can use. */
-interface Problem {
-	readonly title?: unknown;
-	readonly detail?: unknown;
-	readonly requestId?: unknown;
-}
-
-async function problemOf(response: Response): Promise<Problem> {
+/** The members of a problem document (RFC 9457); none where a proxy answered with its own page. */
+async function membersOf(
+	response: Response
+): Promise<{ readonly [Member in keyof Problem]?: unknown }> {
 	try {
 		const body: unknown = await response.json();
 		return typeof body === 'object' && body !== null ? body : {};
 	} catch {
-		// A proxy's page, or nothing: the status says enough.
 		return {};
 	}
 }
 
 const text = (value: unknown): string | null => (typeof value === 'string' ? value : null);
 
-/**
- * JSON of one of the application's own routes, in the shape of that route's schema.
- * @throws {ApiFailure} on any answer but a good one, and on none
- */
-export async function getJson<Answer>(path: string, signal: AbortSignal): Promise<Answer> {
+async function askJson<Answer>(path: string, init: RequestInit): Promise<Answer> {
 	let response: Response;
 	try {
-		response = await fetch(path, { signal, headers: { accept: 'application/json' } });
+		response = await fetch(path, { ...init, headers: { accept: 'application/json' } });
 	} catch (cause) {
-		if (signal.aborted) throw cause;
+		if (init.signal?.aborted) throw cause;
 		throw new ApiFailure('No answer came.', null, null, cause);
 	}
 	if (!response.ok) {
-		const problem = await problemOf(response);
+		const problem = await membersOf(response);
 		throw new ApiFailure(
 			text(problem.detail) ?? text(problem.title) ?? `The answer was ${response.status}.`,
 			response.status,
@@ -54,4 +47,20 @@ export async function getJson<Answer>(path: string, signal: AbortSignal): Promis
 	}
 	const body: Answer = await response.json();
 	return body;
+}
+
+/**
+ * JSON of one of the application's own routes, in the shape of that route's schema.
+ * @throws {ApiFailure} on any answer but a good one, and on none
+ */
+export function getJson<Answer>(path: string, signal: AbortSignal): Promise<Answer> {
+	return askJson<Answer>(path, { signal });
+}
+
+/**
+ * The answer to a request that changes something and needs no body.
+ * @throws {ApiFailure} as `getJson` does
+ */
+export function postJson<Answer>(path: string): Promise<Answer> {
+	return askJson<Answer>(path, { method: 'POST' });
 }

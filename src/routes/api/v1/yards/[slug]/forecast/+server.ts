@@ -1,4 +1,5 @@
 import { json } from '@sveltejs/kit';
+import type { Refresh } from '$lib/api/refresh';
 import { requireMembership } from '$lib/server/access/roles';
 import { parts } from '$lib/server/composition';
 import { currentForecast } from '$lib/server/forecast/current';
@@ -13,9 +14,10 @@ export const POST: RequestHandler = api(async ({ locals, params }) => {
 	const now = new Date();
 	const { outcome, troubles } = await refreshForecast({ db, config }, yard, now);
 	const current = await currentForecast(db, yard, now);
-	return json({
+	const answer: Refresh = {
 		outcome,
 		troubles: troubles.map(({ sentence }) => sentence),
 		forecast: current?.source ?? null
-	});
+	};
+	return json(answer);
 });

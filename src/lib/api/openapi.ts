@@ -1,0 +1,164 @@
+import { z } from 'zod';
+import { healthSchema } from './health';
+import { hoursSchema } from './hours';
+import { outlookRequestSchema, outlookResponseSchema } from './outlook';
+import { problemSchema } from './problem';
+import { readingSchema } from './reading';
+import { refreshSchema } from './refresh';
+
+type Json = Record<string, unknown>;
+
+const schemaOf = (schema: z.ZodType, io: 'input' | 'output'): Json => {
+	// An instant's text becomes a number on the way in: what is sent is the text.
+	const schemaDocument: Json = z.toJSONSchema(schema, { io, unrepresentable: 'any' });
+	// The dialect is the OpenAPI document's own.
+	delete schemaDocument.$schema;
+	return schemaDocument;
+};
+
+const answer = (description: string, name: string): Json => ({
+	description,
+	content: { 'application/json': { schema: { $ref: `#/components/schemas/${name}` } } }
+});
+const PROBLEM_TEXT: Record<number, string> = {
+	400: 'The request is wrong; `errors` names each field',
+	401: 'Nobody is signed in',
+	403: 'The role does not allow it',
+	404: 'There is none, or it is not yours to see',
+	413: 'The body is too large',
+	415: 'The body is not JSON',
+	429: 'Too many requests; see `Retry-After`',
+	503: 'Not able to answer now'
+};
+const problems = (...statuses: number[]): Json =>
+	Object.fromEntries(
+		statuses.map((status) => [
+			String(status),
+			{
+				description: PROBLEM_TEXT[status],
+				content: {
+					'application/problem+json': { schema: { $ref: '#/components/schemas/Problem' } }
+				}
+			}
+		])
+	);
+
+const parameter = (
+	name: string,
+	where: 'path' | 'query',
+	description: string,
+	schema: Json
+): Json => ({
+	name,
+	in: where,
+	required: true,
+	description,
+	schema
+});
+const SLUG = parameter('slug', 'path', 'The yard, as in its address', { type: 'string' });
+const SIGNED_IN = [{ session: [] }];
+
+/** Every route of `/api/v1`, described. Schemas are those the routes parse and answer with. */
+export function openApiDocument(): Json {
+	return {
+		openapi: '3.1.0',
+		info: {
+			title: 'Yardglass',
+			version: '1',
+			description:
+				'Best hours for every queued coat from an hourly forecast. Errors are problem documents (RFC 9457).'
+		},
+		servers: [{ url: '/api/v1' }],
+		paths: {
+			'/outlook': {
+				post: {
+					operationId: 'judgeStep',
+					summary: 'Judge one step in a forecast; nothing is stored',
+					security: [{}, ...SIGNED_IN],
+					requestBody: {
+						required: true,
+						content: {
+							'application/json': { schema: { $ref: '#/components/schemas/OutlookRequest' } }
+						}
+					},
+					responses: {
+						200: answer('The hours of the step', 'Outlook'),
+						...problems(400, 413, 415, 429)
+					}
+				}
+			},
+			'/yards/{slug}/hours': {
+				get: {
+					operationId: 'hoursOfYard',
+					summary: 'The Hours page: every queued step you may see, on one axis',
+					security: SIGNED_IN,
+					parameters: [SLUG],
+					responses: { 200: answer('The hours', 'Hours'), ...problems(401, 404) }
+				}
+			},
+			'/yards/{slug}/steps/{step}/reading': {
+				get: {
+					operationId: 'readHour',
+					summary: 'Every limit of a step in one quarter-hour',
+					security: SIGNED_IN,
+					parameters: [
+						SLUG,
+						parameter('step', 'path', 'The step', { type: 'string', format: 'uuid' }),
+						parameter('at', 'query', 'Any instant in the quarter-hour', {
+							type: 'string',
+							format: 'date-time'
+						})
+					],
+					responses: { 200: answer('The reading', 'Reading'), ...problems(400, 401, 404) }
+				}
+			},
+			'/yards/{slug}/forecast': {
+				post: {
+					operationId: 'askForecast',
+					summary: 'Ask the forecast provider now, as far as its terms allow',
+					security: SIGNED_IN,
+					parameters: [SLUG],
+					responses: { 200: answer('What came of it', 'Refresh'), ...problems(401, 403, 404) }
+				}
+			},
+			'/health': {
+				get: {
+					operationId: 'health',
+					summary: 'How the database, the providers and the queue do',
+					security: [{}],
+					responses: {
+						200: answer('Able to serve', 'Health'),
+						503: answer('The database does not answer', 'Health')
+					}
+				}
+			},
+			'/openapi.json': {
+				get: {
+					operationId: 'describe',
+					summary: 'This document',
+					security: [{}],
+					responses: {
+						200: {
+							description: 'OpenAPI 3.1',
+							content: { 'application/json': { schema: { type: 'object' } } }
+						}
+					}
+				}
+			}
+		},
+		components: {
+			securitySchemes: {
+				session: { type: 'apiKey', in: 'cookie', name: 'yardglass-session' }
+			},
+			schemas: {
+				OutlookRequest: schemaOf(outlookRequestSchema, 'input'),
+				Outlook: schemaOf(outlookResponseSchema, 'output'),
+				Hours: schemaOf(hoursSchema, 'output'),
+				Reading: schemaOf(readingSchema, 'output'),
+				Refresh: schemaOf(refreshSchema, 'output'),
+				Health: schemaOf(healthSchema, 'output'),
+				Problem: schemaOf(problemSchema, 'output')
+			}
+		}
+	};
+}
