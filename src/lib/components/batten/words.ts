@@ -3,11 +3,14 @@ import { overlap, type Axis, type Span } from '../charts/axis';
 import { textWidth } from '../charts/textWidth';
 import type { BattenMeasures } from './measures';
 
+/** What is said where the missing thing's own name is not known, or too long for its place. */
+const NO_DATA = 'no data';
+
 /** The word a run is shut or tightened with: the engine's own, except where nothing is known. */
 export function limiterWord(run: Pick<Run, 'limiter' | 'missing'>): string {
 	if (run.limiter === 'none') return '';
 	if (run.limiter !== 'noData') return run.limiter;
-	return run.missing === null ? 'no data' : `no ${run.missing.replace(/^no /, '')}`;
+	return run.missing === null ? NO_DATA : `no ${run.missing.replace(/^no /, '')}`;
 }
 
 /** A word in its place on the lath. */
@@ -78,16 +81,18 @@ export function words(
 		if (!measures.saysDark && SILENT_ON_LISTS.includes(run.limiter)) continue;
 		const on = run.state === 'tight' ? 'tape' : run.limiter === 'noData' ? 'missing' : 'bare';
 		const weight = on === 'bare' ? 500 : 600;
-		const text = limiterWord(run);
-		if (text === '') continue;
-		const width = textWidth(text, measures.word, weight);
-		const fits = (span: Span) => axis.x(span.to) - axis.x(span.from) >= width + 2 * SPARE[on];
-		for (const day of days) {
-			const part = overlap(run, { from: day.startSlot, to: day.startSlot + day.slots });
-			if (!part || !fits(part)) continue;
-			const light = widest(daylight(part, axis.nights).filter(fits));
-			const { from, to } = light ?? part;
-			placed.push({ text, x: (axis.x(from) + axis.x(to)) / 2, width, on });
+		const place = (text: string, day: Span): Word | null => {
+			const width = textWidth(text, measures.word, weight);
+			const fits = (span: Span) => axis.x(span.to) - axis.x(span.from) >= width + 2 * SPARE[on];
+			const part = overlap(run, day);
+			if (text === '' || !part || !fits(part)) return null;
+			const { from, to } = widest(daylight(part, axis.nights).filter(fits)) ?? part;
+			return { text, x: (axis.x(from) + axis.x(to)) / 2, width, on };
+		};
+		for (const { startSlot, slots } of days) {
+			const day = { from: startSlot, to: startSlot + slots };
+			const word = place(limiterWord(run), day) ?? (on === 'missing' ? place(NO_DATA, day) : null);
+			if (word) placed.push(word);
 		}
 	}
 	return placed;

@@ -28,6 +28,9 @@ export interface Axis extends Span {
 	/** Slots at which a local day begins, without the axis's own start. */
 	readonly midnights: readonly number[];
 	readonly nights: readonly Span[];
+	/** Whether its ends are a day's own ends, and no mere cut. */
+	readonly atDayStart: boolean;
+	readonly atDayEnd: boolean;
 }
 
 /** What two spans have in common; null where they do not meet. */
@@ -53,7 +56,9 @@ export function createAxis(source: AxisSource, pxPerHour: number, window?: Span)
 			(it) => it.slot >= from && it.slot < to
 		),
 		midnights: source.days.map((it) => it.startSlot).filter((it) => it > from && it < to),
-		nights: source.nights.flatMap((it) => overlap(it, { from, to }) ?? [])
+		nights: source.nights.flatMap((it) => overlap(it, { from, to }) ?? []),
+		atDayStart: source.days.some((it) => it.startSlot === from),
+		atDayEnd: source.days.some((it) => it.startSlot + it.slots === to)
 	};
 }
 

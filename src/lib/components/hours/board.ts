@@ -1,0 +1,47 @@
+import type { Hours, HoursStep } from '$lib/api/hours';
+import type { Units } from '$lib/units/quantity';
+import type { Axis } from '../charts/axis';
+import type { ReadingLine } from '../charts/readingLine.svelte';
+
+/** Label column beside the axis, or labels above every lath and one day in view. */
+export type Layout = 'wide' | 'narrow';
+
+/** An hour somebody wants to read. */
+export interface Place {
+	readonly boat: Hours['boats'][number];
+	readonly step: HoursStep;
+	readonly slot: number;
+}
+
+/** Which forecast is drawn. One that came while the page was open is fresh, and laid on with a wipe. */
+export interface Coat {
+	readonly id: string;
+	readonly fresh: boolean;
+}
+
+/** What every row of the board shares. */
+export interface Board {
+	readonly hours: Hours;
+	readonly layout: Layout;
+	readonly axis: Axis;
+	readonly units: Units;
+	readonly line: ReadingLine;
+	/** Where now is, in slots and their fractions. */
+	readonly nowSlot: number;
+	/** Minutes since the forecast was issued, now. */
+	readonly forecastAge: number;
+	/** The day looked at, as an index. */
+	readonly day: number;
+	readonly coat: Coat;
+	/** Figures in charts, px. */
+	readonly figure: number;
+	/** The numbers of the reading line stand on its left, the right edge being near. */
+	readonly flip: boolean;
+	readonly onopen: (place: Place) => void;
+}
+
+/** px an hour and figures, by layout. */
+export const LAYOUTS = {
+	wide: { pxPerHour: 12, figure: 13.5, hoursBetweenFigures: 6, airHeight: 92, windHeight: 84 },
+	narrow: { pxPerHour: 27, figure: 15, hoursBetweenFigures: 2, airHeight: 104, windHeight: 96 }
+} as const;
