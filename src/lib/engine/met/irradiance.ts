@@ -1,7 +1,8 @@
 /** Short-wave irradiance in W/m²; angles in degrees, azimuths from north clockwise. */
 
 const RADIANS = Math.PI / 180;
-const SOLAR_CONSTANT = 1361;
+/** W/m², ASTM E490: of the time when Erbs' relation was fitted, which it is used for. */
+const SOLAR_CONSTANT = 1366.1;
 
 /** Global irradiance under a clear sky at a sun altitude. Source: Haurwitz 1945. */
 export function clearSkyGlobal(sunAltitude: number): number {
@@ -23,9 +24,16 @@ export function diffuseFractionErbs(clearness: number): number {
 	return 0.9511 - 0.1604 * k + 4.388 * k ** 2 - 16.638 * k ** 3 + 12.336 * k ** 4;
 }
 
-/** Irradiance outside the air on a plane facing the sun. Source: Spencer 1971, first term. */
+/** Irradiance outside the air on a plane facing the sun. Source: Spencer 1971. */
 export function extraterrestrialNormal(dayOfYear: number): number {
-	return SOLAR_CONSTANT * (1 + 0.033 * Math.cos((2 * Math.PI * dayOfYear) / 365));
+	const angle = (2 * Math.PI * (dayOfYear - 1)) / 365;
+	const distance =
+		1.00011 +
+		0.034221 * Math.cos(angle) +
+		0.00128 * Math.sin(angle) +
+		0.000719 * Math.cos(2 * angle) +
+		0.000077 * Math.sin(2 * angle);
+	return SOLAR_CONSTANT * distance;
 }
 
 /** Under this the sun is too low to divide by its sine; the light is taken as diffuse. */
