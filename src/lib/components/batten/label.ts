@@ -15,8 +15,8 @@ export interface BlockPlace {
 export interface BlockRoom {
 	/** Width of the axis. */
 	readonly width: number;
-	/** No other lath lies within 20 px above this one: the first row of a boat. */
-	readonly freeAbove: boolean;
+	/** Outside the block: also above it where no lath lies within 20 px, only beside it, or nowhere. */
+	readonly outside: 'above' | 'beside' | 'none';
 }
 
 export interface Label {
@@ -37,7 +37,7 @@ const HALF_FIGURE = 0.35;
 
 /**
  * Where the start of a block stands: the first free of inside it, above it, right of it, left of
- * it. Null where none is: the reading has it.
+ * it. Null where none is: the row's label or the reading has it.
  */
 export function blockLabel(
 	text: string,
@@ -52,7 +52,8 @@ export function blockLabel(
 		return { x: middle, y, anchor: 'middle', inside: true };
 	}
 	const onAxis = (left: number) => left >= 0 && left + width <= room.width;
-	if (room.freeAbove && onAxis(block.left)) {
+	if (room.outside === 'none') return null;
+	if (room.outside === 'above' && onAxis(block.left)) {
 		return { x: block.left, y: -block.above - OVER_BLOCK, anchor: 'start', inside: false };
 	}
 	if (onAxis(block.right + SPARE_BESIDE)) {

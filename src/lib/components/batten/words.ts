@@ -26,16 +26,16 @@ export interface Word {
 const SPARE = { bare: 3, missing: 3, tape: 5 } as const;
 const SILENT_ON_LISTS: readonly Run['limiter'][] = ['dark', 'hours'];
 
-/** The parts of a span in no night; the whole span where it is all night. */
-function daylight(span: Span, nights: readonly Span[]): Span[] {
+/** The parts of a span that lie in none of the others. */
+function without(span: Span, others: readonly Span[]): Span[] {
 	let parts = [span];
-	for (const night of nights) {
+	for (const other of others) {
 		parts = parts.flatMap((part) => {
-			const dark = overlap(part, night);
-			if (!dark) return [part];
+			const common = overlap(part, other);
+			if (!common) return [part];
 			return [
-				{ from: part.from, to: dark.from },
-				{ from: dark.to, to: part.to }
+				{ from: part.from, to: common.from },
+				{ from: common.to, to: part.to }
 			].filter((it) => it.from < it.to);
 		});
 	}
@@ -68,12 +68,14 @@ function sameWord(runs: readonly Run[]): Run[] {
 /**
  * Where words fit. A run that outlasts a day says its word once a day, by day where there is room,
  * so that no screenful of lath is left without its reason.
+ * @param covered slots under a block, where no word can be read
  */
 export function words(
 	runs: readonly Run[],
 	days: Hours['days'],
 	axis: Axis,
-	measures: Pick<BattenMeasures, 'word' | 'saysDark'>
+	measures: Pick<BattenMeasures, 'word' | 'saysDark'>,
+	covered: Span | null = null
 ): Word[] {
 	const placed: Word[] = [];
 	for (const run of sameWord(runs)) {
@@ -85,8 +87,12 @@ export function words(
 			const width = textWidth(text, measures.word, weight);
 			const fits = (span: Span) => axis.x(span.to) - axis.x(span.from) >= width + 2 * SPARE[on];
 			const part = overlap(run, day);
-			if (text === '' || !part || !fits(part)) return null;
-			const { from, to } = widest(daylight(part, axis.nights).filter(fits)) ?? part;
+			if (text === '' || !part) return null;
+			const free = without(part, covered ? [covered] : []);
+			const light = free.flatMap((it) => without(it, axis.nights));
+			const room = widest(light.filter(fits)) ?? widest(free.filter(fits));
+			if (!room) return null;
+			const { from, to } = room;
 			return { text, x: (axis.x(from) + axis.x(to)) / 2, width, on };
 		};
 		for (const { startSlot, slots } of days) {

@@ -115,7 +115,13 @@ export function dailyExtremes(
 				best = { from: slot, to: slot, value };
 			} else if (value === best.value && best.to === slot - 1) best.to = slot;
 		}
-		return best ? [{ slot: (best.from + best.to + 1) / 2, value: best.value }] : [];
+		if (!best) return [];
+		// On its way up to the next day's most (or down from the last one's), a day has none of its own.
+		const { value } = best;
+		const onTheWay = [values[best.from - 1], values[best.to + 1]].some(
+			(it) => typeof it === 'number' && (which === 'most' ? it > value : it < value)
+		);
+		return onTheWay ? [] : [{ slot: (best.from + best.to + 1) / 2, value }];
 	});
 }
 
@@ -162,15 +168,18 @@ export function rainSpells(hours: readonly RainHour[]): RainHour[] {
 
 /**
  * Where a word can stand over a line without touching it: the first place of each day, from 06:00
- * on if there is one, over which every value stays under `below` for `slots`.
+ * on if there is one, over which every value stays under `below` for `slots`, and that does not
+ * lie across the slot `avoid`.
  */
 export function clearPlaces(
 	values: Values,
 	days: Hours['days'],
 	slots: number,
-	below: number
+	below: number,
+	avoid: number
 ): number[] {
 	const clear = (from: number, window: Span) =>
+		(avoid < from || avoid >= from + slots) &&
 		overlap({ from, to: from + slots }, window)?.to === from + slots &&
 		values.slice(from, from + slots).every((it) => it === null || it < below);
 	return days.flatMap((day) => {

@@ -29,7 +29,7 @@ export const LINES = {
 	keel: 'M478 249L506 330H676L704 244',
 	chocks: ['M506 332H554V352H506Z', 'M628 332H676V352H628Z'],
 	stands: [
-		{ x: 286, top: 240 },
-		{ x: 850, top: 236 }
+		{ x: 286, top: 234, tilt: 2 },
+		{ x: 850, top: 223, tilt: -2 }
 	]
 } as const;

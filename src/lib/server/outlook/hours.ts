@@ -34,6 +34,12 @@ function groupByBoat(
 	return [...boats.values()];
 }
 
+/** The one step the sentence names; null where it speaks of several or of none. */
+function spokenStepOf(queue: readonly QueuedStep[], spoken: SpokenDay): string | null {
+	const named = queue.filter((_, i) => spoken.steps[i].hours !== null);
+	return named.length === 1 ? named[0].step.id : null;
+}
+
 /** The Hours page of a yard for one of its people, as of `now`. */
 export async function hoursOfYard(db: Database, membership: Membership, now: Date): Promise<Hours> {
 	const { yard, user } = membership;
@@ -83,6 +89,7 @@ export async function hoursOfYard(db: Database, membership: Membership, now: Dat
 		slotCount: axis.slotCount,
 		days,
 		spokenDay,
+		spokenStep: spokenStepOf(queue, spoken),
 		nights: nightSpans(site, axis),
 		forecast: current?.source ?? null,
 		headline: headline(spoken),
