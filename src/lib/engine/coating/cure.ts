@@ -36,9 +36,11 @@ export function cureClock(
 	const unknown = new Int32Array(count + 1);
 	const extrapolated = new Int32Array(count + 1);
 	const standstill = new Int32Array(count + 1);
+	// A constant time on no curing minimum asks for no temperature.
+	const needed = constantRate === null || curingMin > -Infinity;
 	for (let i = 0; i < count; i++) {
 		const temperature = surfaceTemperature[i];
-		const isKnown = temperature === temperature;
+		const isKnown = temperature === temperature || !needed;
 		const still = side === 'earliest' && temperature < curingMin;
 		let rate = 0;
 		if (isKnown && !still) {

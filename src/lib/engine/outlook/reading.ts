@@ -52,8 +52,14 @@ function readTrack(track: LimitTrack, slot: number): LimitReading {
 	};
 }
 
-/** Rooms in order, what is unknown first: it shuts whatever else holds. */
-const order = (reading: LimitReading): number => reading.scaledRoom ?? -Infinity;
+/**
+ * Place of a row: least room first. What is unknown in the slot itself comes before all, what is
+ * unknown later after the limits already broken, as the limiter is chosen.
+ */
+function order({ scaledRoom, phase }: LimitReading): number {
+	if (scaledRoom !== null) return scaledRoom;
+	return phase === 'apply' ? -Infinity : -Number.MIN_VALUE;
+}
 
 /**
  * Every limit of a step at one slot, least room first, drawn from the same tracks as

@@ -68,7 +68,9 @@ export async function readingOf(
 	);
 	const instant = (seconds: number): string => new Date(seconds * 1000).toISOString();
 	const start = weather.grid.start + slot * SLOT_SECONDS;
-	const binding = reading.limits.find(({ limiter }) => limiter === reading.limiter);
+	const binding = reading.limits.find(
+		({ limiter, scaledRoom }) => limiter === reading.limiter && scaledRoom !== null
+	);
 	const facts: ReadingFacts = {
 		slotStart: instant(start),
 		timeZone: yard.timeZone,

@@ -1,0 +1,95 @@
+import { describe, expect, test } from 'vitest';
+import {
+	daylightMask,
+	localDays,
+	nights,
+	workMask
+} from '../../../../src/lib/engine/outlook/calendar';
+import { SITE } from './flatWeather';
+
+const epoch = (text: string): number => Date.parse(text) / 1000;
+
+describe('local days', () => {
+	test('the spring change makes a day of 92 slots and the autumn one of 100', () => {
+		const spring = localDays('Europe/Lisbon', epoch('2026-03-28T12:00:00Z'), 3);
+		expect(spring.map(({ date, slots }) => [date, slots])).toEqual([
+			['2026-03-28', 96],
+			['2026-03-29', 92],
+			['2026-03-30', 96]
+		]);
+		const autumn = localDays('Europe/Lisbon', epoch('2026-10-25T12:00:00Z'), 1);
+		expect(autumn[0]).toEqual({
+			date: '2026-10-25',
+			start: epoch('2026-10-24T23:00:00Z'),
+			slots: 100
+		});
+	});
+
+	test('days follow each other without a gap, in zones off the hour too', () => {
+		for (const zone of [
+			'Europe/Lisbon',
+			'Asia/Kathmandu',
+			'Australia/Lord_Howe',
+			'America/St_Johns'
+		]) {
+			const days = localDays(zone, epoch('2026-04-03T00:00:00Z'), 8);
+			days
+				.slice(1)
+				.forEach((day, i) => expect(day.start).toBe(days[i].start + days[i].slots * 900));
+		}
+	});
+});
+
+describe('work hours', () => {
+	const grid = { start: epoch('2026-03-29T00:00:00Z'), count: 96 };
+	const marked = (mask: Uint8Array): number => mask.reduce((a, b) => a + b, 0);
+
+	test('on the day of a change they stay at the clock’s times', () => {
+		const mask = workMask('Europe/Lisbon', [{ days: [7], from: '08:00', to: '12:00' }], grid);
+		// 08:00 is 07:00 UTC once summer time has come.
+		expect(mask[28]).toBe(1);
+		expect(mask[27]).toBe(0);
+		expect(marked(mask)).toBe(16);
+	});
+
+	test('hours from before the change run shorter by the hour that is missing', () => {
+		const mask = workMask('Europe/Lisbon', [{ days: [7], from: '00:00', to: '06:00' }], grid);
+		expect(marked(mask)).toBe(20);
+	});
+
+	test('a slot that an entry does not fill is out, and entries that meet are one', () => {
+		const part = workMask('UTC', [{ days: [7], from: '08:05', to: '08:40' }], grid);
+		expect(marked(part)).toBe(1);
+		const joined = workMask(
+			'UTC',
+			[
+				{ days: [7], from: '08:00', to: '08:50' },
+				{ days: [7], from: '08:50', to: '09:15' }
+			],
+			grid
+		);
+		expect(marked(joined)).toBe(5);
+	});
+});
+
+describe('day and night', () => {
+	test('daylight is inside sunrise and sunset, and civil night outside both', () => {
+		const start = epoch('2026-05-04T00:00:00Z');
+		const mask = daylightMask(SITE, { start, count: 96 });
+		const dark = nights(SITE, start, start + 86_400);
+		expect(mask[48]).toBe(1);
+		expect(mask[0]).toBe(0);
+		expect(dark.length).toBe(2);
+		const first = mask.indexOf(1) * 900 + start;
+		expect(first).toBeGreaterThan(dark[0].to);
+	});
+
+	test('beyond the polar circle there may be no day, or no night', () => {
+		const north = { latitude: 78, longitude: 15 };
+		const winter = epoch('2026-01-03T00:00:00Z');
+		const summer = epoch('2026-06-21T00:00:00Z');
+		expect(daylightMask(north, { start: winter, count: 96 }).includes(1)).toBe(false);
+		expect(daylightMask(north, { start: summer, count: 96 }).includes(0)).toBe(false);
+		expect(nights(north, summer, summer + 86_400)).toEqual([]);
+	});
+});
