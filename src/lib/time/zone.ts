@@ -1,27 +1,64 @@
-import { formatInTimeZone } from 'date-fns-tz/formatInTimeZone';
 import { slotStart } from './slots';
 
 /** An instant: epoch ms or ISO 8601. Every text is in the zone given (IANA name), 24 h. */
 export type Instant = number | string;
 
+type Field = 'weekday' | 'day' | 'month' | 'year' | 'hour' | 'minute';
+
+const formatters = new Map<string, Intl.DateTimeFormat>();
+
+function formatterOf(timeZone: string): Intl.DateTimeFormat {
+	const known = formatters.get(timeZone);
+	if (known) return known;
+	const made = new Intl.DateTimeFormat('en-US', {
+		timeZone,
+		weekday: 'short',
+		day: 'numeric',
+		month: 'short',
+		year: 'numeric',
+		hour: '2-digit',
+		minute: '2-digit',
+		hourCycle: 'h23'
+	});
+	formatters.set(timeZone, made);
+	return made;
+}
+
+/**
+ * What the clocks and calendars of a zone show. The platform's own formatter: one that goes through
+ * a Date of the reader's zone reads an hour wrong wherever the reader's clocks spring forward.
+ */
+function shown(instant: Instant, timeZone: string): Record<Field, string> {
+	const fields = { weekday: '', day: '', month: '', year: '', hour: '', minute: '' };
+	const time = typeof instant === 'string' ? Date.parse(instant) : instant;
+	for (const { type, value } of formatterOf(timeZone).formatToParts(time)) {
+		if (type in fields) fields[type as Field] = value;
+	}
+	return fields;
+}
+
 /** "09:45" */
 export function clock(instant: Instant, timeZone: string): string {
-	return formatInTimeZone(instant, timeZone, 'HH:mm');
+	const { hour, minute } = shown(instant, timeZone);
+	return `${hour}:${minute}`;
 }
 
 /** "Wed 13" */
 export function day(instant: Instant, timeZone: string): string {
-	return formatInTimeZone(instant, timeZone, 'EEE d');
+	const it = shown(instant, timeZone);
+	return `${it.weekday} ${it.day}`;
 }
 
 /** "Wed 09:45" */
 export function dayAndClock(instant: Instant, timeZone: string): string {
-	return formatInTimeZone(instant, timeZone, 'EEE HH:mm');
+	const it = shown(instant, timeZone);
+	return `${it.weekday} ${it.hour}:${it.minute}`;
 }
 
 /** "Wed 13 May, 09:45" */
 export function dateAndClock(instant: Instant, timeZone: string): string {
-	return formatInTimeZone(instant, timeZone, 'EEE d MMM, HH:mm');
+	const it = shown(instant, timeZone);
+	return `${it.weekday} ${it.day} ${it.month}, ${it.hour}:${it.minute}`;
 }
 
 /** A slot at which a local hour begins. */
@@ -39,9 +76,9 @@ export interface LocalHour {
 export function localHours(start: string, slotCount: number, timeZone: string): LocalHour[] {
 	const hours: LocalHour[] = [];
 	for (let slot = 0; slot < slotCount; slot++) {
-		const [hour, minute] = clock(slotStart(start, slot), timeZone).split(':').map(Number);
-		if (minute === 0) {
-			hours.push({ slot, hour });
+		const { hour, minute } = shown(slotStart(start, slot), timeZone);
+		if (minute === '00') {
+			hours.push({ slot, hour: Number(hour) });
 			// The next quarter-hours cannot be full hours.
 			slot += 3;
 		}
@@ -49,8 +86,7 @@ export function localHours(start: string, slotCount: number, timeZone: string): 
 	return hours;
 }
 
-/** Whether two zones show the same clock at an instant. */
+/** Whether two zones show the same clock and day at an instant. */
 export function sameClock(instant: Instant, one: string, other: string): boolean {
-	const pattern = "yyyy-MM-dd'T'HH:mm";
-	return formatInTimeZone(instant, one, pattern) === formatInTimeZone(instant, other, pattern);
+	return dateAndClock(instant, one) === dateAndClock(instant, other);
 }

@@ -1,4 +1,4 @@
-import { describe, expect, test } from 'vitest';
+import { afterEach, describe, expect, test } from 'vitest';
 import { slotAt, slotStart, SLOTS_PER_HOUR } from '../../../src/lib/time/slots';
 import {
 	clock,
@@ -22,6 +22,21 @@ describe('texts in the yard’s zone', () => {
 
 	test('midnight is 00:00 of the day it begins', () => {
 		expect(dayAndClock('2026-05-12T23:00:00Z', LISBON)).toBe('Wed 00:00');
+	});
+});
+
+describe('the reader’s own zone', () => {
+	const before = process.env.TZ;
+	afterEach(() => {
+		if (before === undefined) delete process.env.TZ;
+		else process.env.TZ = before;
+	});
+
+	test('a time the reader’s clocks leave out in spring is still read right', () => {
+		process.env.TZ = 'Europe/Paris';
+		// Paris has no 02:30 on this day; the Azores, at UTC then, have.
+		expect(new Date(2026, 2, 29, 2, 30).getHours()).toBe(3);
+		expect(clock('2026-03-29T02:30:00Z', 'Atlantic/Azores')).toBe('02:30');
 	});
 });
 

@@ -1,7 +1,7 @@
-import { scaleLinear } from 'd3-scale';
 import type { Hours } from '$lib/api/hours';
 import { SLOTS_PER_HOUR } from '$lib/time/slots';
 import { localHours, type LocalHour } from '$lib/time/zone';
+import { linear } from './linear';
 
 /** Slots [from, to). */
 export interface Span {
@@ -44,7 +44,7 @@ export function overlap(one: Span, other: Span): Span | null {
 export function createAxis(source: AxisSource, pxPerHour: number, window?: Span): Axis {
 	const { from, to } = window ?? { from: 0, to: source.slotCount };
 	const width = ((to - from) * pxPerHour) / SLOTS_PER_HOUR;
-	const scale = scaleLinear([from, to], [0, width]);
+	const scale = linear([from, to], [0, width]);
 	return {
 		from,
 		to,

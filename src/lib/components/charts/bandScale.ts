@@ -1,9 +1,10 @@
-import { scaleLinear } from 'd3-scale';
+import { ticks } from 'd3-array';
 import type { Hours } from '$lib/api/hours';
 import { rounded } from '$lib/units/rounding';
 import { toSpeed } from '$lib/units/speed';
 import { toTemperature } from '$lib/units/temperature';
 import type { Units } from '$lib/units/quantity';
+import { linear } from './linear';
 import { extent } from './series';
 
 /** How high a value of a band stands, and the lines that say so. */
@@ -33,14 +34,16 @@ function scaled(
 	convert: (value: number) => number,
 	text: (shown: number) => string
 ): BandScale {
-	const scale = scaleLinear([convert(domain[0]), convert(domain[1])], range);
-	const ticks = scale.ticks(MOST_LINES);
-	const every = Math.ceil(ticks.length / MOST_LINES);
+	const [from, to] = domain.map(convert);
+	// A flat calm or a missing swing still needs a height to stand in.
+	const scale = linear([from, to > from ? to : from + 1], range);
+	const marks = ticks(from, to, MOST_LINES);
+	const every = Math.ceil(marks.length / MOST_LINES);
 	return {
 		height,
 		y: (value) => scale(convert(value)),
 		text: (value) => text(convert(value)),
-		lines: ticks.filter((_, i) => i % every === 0).map((it) => ({ y: scale(it), text: text(it) }))
+		lines: marks.filter((_, i) => i % every === 0).map((it) => ({ y: scale(it), text: text(it) }))
 	};
 }
 
