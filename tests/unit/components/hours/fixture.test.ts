@@ -1,6 +1,6 @@
 import { expect, test } from 'vitest';
-import { hoursSchema } from '../../../src/lib/api/hours';
-import { hoursFixture } from '../../fixtures/hours';
+import { hoursSchema } from '../../../../src/lib/api/hours';
+import { hoursFixture } from '../../../fixtures/hours';
 
 const page = hoursFixture();
 
