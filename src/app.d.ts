@@ -7,6 +7,11 @@ declare global {
 			/** Number to give when asking for help; in the log under the same number. */
 			requestId?: string;
 		}
+		/** What a history entry keeps beside its address. */
+		interface PageState {
+			/** A reading lies open over the page, so that Back closes it. */
+			reading?: boolean;
+		}
 		interface Locals {
 			requestId: string;
 			user: SignedInUser | null;

@@ -204,6 +204,26 @@ test.describe('the Hours page on a phone', () => {
 		expect((await dialog.boundingBox())?.width).toBe(390);
 	});
 
+	test('Back closes the reading and stays on the page', async ({ page }) => {
+		await signIn(page, 'manager');
+		const batten = battens(page).first();
+		await batten.press('Enter');
+		const dialog = page.getByRole('dialog');
+		await expect(dialog).toBeVisible();
+		await page.goBack();
+		await expect(dialog).toBeHidden();
+		await expect(page).toHaveURL(new RegExp(`${YARD_PATH}$`));
+		await expect(batten).toBeFocused();
+		// Closed by hand, it leaves nothing behind for Back to close.
+		await batten.press('Enter');
+		await expect(dialog).toBeVisible();
+		await page.keyboard.press('Escape');
+		await expect(dialog).toBeHidden();
+		await expect
+			.poll(() => page.evaluate(() => JSON.stringify(history.state).includes('reading')))
+			.toBe(false);
+	});
+
 	test('nothing pressed with a thumb is lower than 48 px', async ({ page }) => {
 		await signIn(page, 'manager');
 		await battens(page).first().press('Enter');
