@@ -12,7 +12,10 @@ import svelteConfig from './svelte.config.js';
 const layer = (files, message, group, more = {}) => ({
 	files,
 	rules: {
-		'no-restricted-imports': ['error', { patterns: [{ group, message, allowTypeImports: false }], ...more }]
+		'no-restricted-imports': [
+			'error',
+			{ patterns: [{ group, message, allowTypeImports: false }], ...more }
+		]
 	}
 });
 
@@ -37,7 +40,16 @@ const INSIDE_ENGINE = [
 ];
 
 export default ts.config(
-	{ ignores: ['.svelte-kit/', 'build/', '.local/', 'node_modules/', 'drizzle/migrations/', 'test-results/'] },
+	{
+		ignores: [
+			'.svelte-kit/',
+			'build/',
+			'.local/',
+			'node_modules/',
+			'drizzle/migrations/',
+			'test-results/'
+		]
+	},
 	js.configs.recommended,
 	...ts.configs.recommended,
 	...svelte.configs.recommended,
@@ -81,29 +93,60 @@ export default ts.config(
 		rules: {
 			'no-restricted-syntax': [
 				'error',
-				{ selector: 'CallExpression[callee.object.name="Date"][callee.property.name="now"]', message: 'The engine has no clock: take the time as an argument.' },
-				{ selector: 'NewExpression[callee.name="Date"][arguments.length=0]', message: 'The engine has no clock: take the time as an argument.' }
+				{
+					selector: 'CallExpression[callee.object.name="Date"][callee.property.name="now"]',
+					message: 'The engine has no clock: take the time as an argument.'
+				},
+				{
+					selector: 'NewExpression[callee.name="Date"][arguments.length=0]',
+					message: 'The engine has no clock: take the time as an argument.'
+				}
 			]
 		}
 	},
 	layer(
 		['src/lib/units/**', 'src/lib/time/**', 'src/lib/api/**', 'src/lib/sentences/**'],
 		'Units, times, API schemas and sentences stand below screens and server.',
-		['**/server/**', '**/components/**', '**/routes/**', '**/engine/*/**', '$lib/server/**', '$app/**', '$env/**', 'node:*', 'drizzle-orm', 'drizzle-orm/**', 'pg']
+		[
+			'**/server/**',
+			'**/components/**',
+			'**/routes/**',
+			'**/engine/*/**',
+			'$lib/server/**',
+			'$app/**',
+			'$env/**',
+			'node:*',
+			'drizzle-orm',
+			'drizzle-orm/**',
+			'pg'
+		]
 	),
 	layer(
 		['src/lib/components/**'],
 		'Components know no SQL and no server: data comes as props or through $lib/api.',
-		['**/server/**', '**/routes/**', '$lib/server/**', '$env/**', '**/engine/*/**', 'drizzle-orm', 'drizzle-orm/**', 'pg', 'node:*']
+		[
+			'**/server/**',
+			'**/routes/**',
+			'$lib/server/**',
+			'$env/**',
+			'**/engine/*/**',
+			'drizzle-orm',
+			'drizzle-orm/**',
+			'pg',
+			'node:*'
+		]
 	),
 	layer(
 		['src/lib/server/**'],
 		'The server knows no screens, and reaches the engine through its public face.',
 		['**/components/**', '**/routes/**', '$lib/components/**', 'svelte', '**/engine/*/**']
 	),
-	layer(
-		['src/routes/**'],
-		'Routes hold no rules and no SQL: call $lib/server by subject.',
-		['drizzle-orm', 'drizzle-orm/**', 'pg', '$lib/server/db/schema', '$lib/server/db/schema/**', '$lib/engine/*/**']
-	)
+	layer(['src/routes/**'], 'Routes hold no rules and no SQL: call $lib/server by subject.', [
+		'drizzle-orm',
+		'drizzle-orm/**',
+		'pg',
+		'$lib/server/db/schema',
+		'$lib/server/db/schema/**',
+		'$lib/engine/*/**'
+	])
 );

@@ -18,7 +18,11 @@ export default defineConfig({
 			},
 			{
 				extends: true,
-				test: { name: 'published', include: ['tests/published/**/*.test.ts'], setupFiles: outsideChecks }
+				test: {
+					name: 'published',
+					include: ['tests/published/**/*.test.ts'],
+					setupFiles: outsideChecks
+				}
 			},
 			{
 				extends: true,

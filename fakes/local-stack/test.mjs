@@ -48,7 +48,9 @@ async function runner(words, command, args, report, count, env) {
 const countVitest = ({ numPassedTests, numFailedTests, testResults }) => ({
 	passed: numPassedTests,
 	// A file that could not be loaded fails without a test of its own.
-	failed: numFailedTests + testResults.filter((it) => it.status === 'failed' && it.assertionResults.length === 0).length
+	failed:
+		numFailedTests +
+		testResults.filter((it) => it.status === 'failed' && it.assertionResults.length === 0).length
 });
 const countPlaywright = ({ stats }) => ({
 	passed: stats.expected + stats.flaky,

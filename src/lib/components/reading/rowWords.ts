@@ -27,14 +27,22 @@ const PHASE_WORDS: Record<LimitReadingRow['phase'], string> = {
 	set: 'until the next coat'
 };
 
-/** Where the number is from, of which face, and when it binds if that is later than the start. */
+/**
+ * Where the number is from, of which face, and when it binds if that is later than the start.
+ * @param faced whether the face must be told, because the step has several
+ */
 export function originWords(
 	row: Pick<LimitReadingRow, 'origin' | 'face' | 'phase' | 'at'>,
 	slotStart: string,
-	timeZone: string
+	timeZone: string,
+	faced: boolean
 ): string {
 	const later = Date.parse(row.at) > Date.parse(slotStart) ? `at ${clock(row.at, timeZone)}` : '';
-	return [row.origin, row.face, [later, PHASE_WORDS[row.phase]].filter(Boolean).join(' ')]
+	return [
+		row.origin,
+		faced ? row.face : '',
+		[later, PHASE_WORDS[row.phase]].filter(Boolean).join(' ')
+	]
 		.filter(Boolean)
 		.join(', ');
 }
@@ -47,7 +55,7 @@ export function boundWords(
 	const about = LIMIT_WORDS[row.limit];
 	if (row.bound === null || row.side === 'in') return about;
 	const { number, unit } = quantity(row.bound, row.unit, units);
-	return `${about}, ${row.side} ${number} ${unit}`.trimEnd();
+	return `${about}, ${row.side} ${number}${unit && `\u00a0${unit}`}`;
 }
 
 /** The value; in words where it is only in or out, or unknown. */

@@ -65,19 +65,20 @@ describe('the ruler of room', () => {
 describe('words of a row', () => {
 	const zone = 'Europe/Lisbon';
 
-	test('where the number is from, and of which face', () => {
-		expect(originWords(row(), START, zone)).toBe('forecast, port bottom');
+	test('where the number is from, and of which face where there are several', () => {
+		expect(originWords(row(), START, zone, true)).toBe('forecast, port bottom');
+		expect(originWords(row(), START, zone, false)).toBe('forecast');
 	});
 
 	test('when it binds, if that is later than the quarter-hour', () => {
 		const later = row({ phase: 'wet', origin: 'derived', at: '2026-05-13T16:00:00.000Z' });
-		expect(originWords(later, START, zone)).toBe('derived, port bottom, at 17:00 until dry');
+		expect(originWords(later, START, zone, true)).toBe('derived, port bottom, at 17:00 until dry');
 	});
 
 	test('the bound with its side and unit', () => {
-		expect(boundWords(row(), USUAL_UNITS)).toBe('gust, most 20.0 kn');
+		expect(boundWords(row(), USUAL_UNITS)).toBe('gust, most 20.0\u00a0kn');
 		const spread = row({ limit: 'spread', side: 'least', bound: 3, unit: 'kelvin' });
-		expect(boundWords(spread, USUAL_UNITS)).toBe('spread, least 3.0 °C');
+		expect(boundWords(spread, USUAL_UNITS)).toBe('spread, least 3.0\u00a0°C');
 		expect(boundWords(row({ limit: 'daylight', side: 'in', bound: null }), USUAL_UNITS)).toBe(
 			'daylight'
 		);
