@@ -13,25 +13,26 @@ export interface TimeCurve {
 	readonly kelvin: readonly number[];
 	/** ln of minutes at the rows. */
 	readonly logMinutes: readonly number[];
+	/** Per segment between two rows: ln τ = intercept + slope/T. */
+	readonly slope: readonly number[];
+	readonly intercept: readonly number[];
 }
 
 /** The curve of a table with rows; a constant becomes a single row. Null: the tin sets no limit. */
 export function timeCurve(table: Exclude<TimeTable, null>): TimeCurve {
 	const rows: readonly (readonly [number, number])[] =
 		typeof table === 'number' ? [[20, table]] : table;
-	return {
-		kelvin: rows.map(([temperature]) => temperature + KELVIN),
-		logMinutes: rows.map(([, minutes]) => Math.log(minutes))
-	};
+	const kelvin = rows.map(([temperature]) => temperature + KELVIN);
+	const logMinutes = rows.map(([, minutes]) => Math.log(minutes));
+	const slope = kelvin
+		.slice(1)
+		.map((t, i) => (logMinutes[i + 1] - logMinutes[i]) / (1 / t - 1 / kelvin[i]));
+	const intercept = slope.map((it, i) => logMinutes[i] - it / kelvin[i]);
+	return { kelvin, logMinutes, slope, intercept };
 }
 
-const interpolate = (curve: TimeCurve, segment: number, kelvin: number): number => {
-	const t0 = curve.kelvin[segment];
-	const t1 = curve.kelvin[segment + 1];
-	const l0 = curve.logMinutes[segment];
-	const l1 = curve.logMinutes[segment + 1];
-	return l0 + ((l1 - l0) * (1 / kelvin - 1 / t0)) / (1 / t1 - 1 / t0);
-};
+const interpolate = (curve: TimeCurve, segment: number, kelvin: number): number =>
+	curve.intercept[segment] + curve.slope[segment] / kelvin;
 
 /**
  * Natural logarithm of the minutes at a temperature (°C); +Infinity where the clock stands still.

@@ -76,7 +76,7 @@ function conditionsOfSide(
 	const spread = new Float64Array(count);
 	for (let i = 0; i < count; i++) spread[i] = surfaceShaded[i] - air.dewPoint[i];
 
-	const flags = Uint8Array.from(weather.flags);
+	const flags = weather.flags.slice();
 	const issuedSlot = (weather.issuedAt - weather.grid.start) / SLOT_SECONDS;
 	for (const start of starts) {
 		if (start + HISTORY_SLOTS <= issuedSlot) continue;

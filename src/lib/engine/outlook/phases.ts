@@ -33,18 +33,32 @@ function clockWindow(step: Step, name: TimeName, face: FaceConditions): ClockWin
 	if (table === undefined) return null;
 	const { count } = face.weather.grid;
 	// The tin sets no limit: done at once.
-	if (table === null)
-		return { ends: Int32Array.from({ length: count }, (_, i) => i + 1), clock: null };
+	if (table === null) return { ends: nextSlots(count), clock: null };
 	// Earliest clocks run on the coldest spot.
 	const clock = cureClock(table, face.surfaceShaded, 'earliest', step.limits.curing?.min);
 	return { ends: finishSlots(clock).subarray(1), clock };
 }
 
-const later = (a: ClockWindow | null, b: ClockWindow | null, count: number): Int32Array => {
+/** Ends of the empty window after each slot: nothing to wait for. */
+function nextSlots(count: number): Int32Array {
 	const ends = new Int32Array(count);
-	for (let i = 0; i < count; i++) ends[i] = Math.max(a?.ends[i] ?? i + 1, b?.ends[i] ?? i + 1);
+	for (let i = 0; i < count; i++) ends[i] = i + 1;
 	return ends;
-};
+}
+
+/** The later of two ends, slot by slot. */
+function later(a: Int32Array, b: Int32Array): Int32Array {
+	const ends = new Int32Array(a.length);
+	for (let i = 0; i < ends.length; i++) ends[i] = a[i] > b[i] ? a[i] : b[i];
+	return ends;
+}
+
+/** Ends no later than a slot. */
+function clipped(ends: Int32Array, most: number): Int32Array {
+	const out = new Int32Array(ends.length);
+	for (let i = 0; i < out.length; i++) out[i] = ends[i] < most ? ends[i] : most;
+	return out;
+}
 
 /** The wet and set phase tracks of a step on one face. */
 export function phaseTracks(
@@ -59,12 +73,12 @@ export function phaseTracks(
 	const touch = clockWindow(step, 'touchDry', face);
 	const keep = clockWindow(step, 'keepDry', face);
 	const over = clockWindow(step, 'overcoatMin', face);
-	const wetEnds = later(touch, keep, count);
-	const touchEnds = (touch ?? keep)?.ends ?? later(null, null, count);
-	const setEnds = later(over, { ends: wetEnds, clock: null }, count);
+	const none = nextSlots(count);
+	const wetEnds = later(touch?.ends ?? none, keep?.ends ?? none);
+	const touchEnds = (touch ?? keep)?.ends ?? none;
+	const setEnds = later(over?.ends ?? none, wetEnds);
 
 	const tracks: LimitTrack[] = [];
-	const clip = (ends: Int32Array): Int32Array => ends.map((end) => Math.min(end, knownTo));
 	const windowed = (
 		name: Pick<
 			LimitTrack,
@@ -76,7 +90,7 @@ export function phaseTracks(
 	): void => {
 		const scaled = new Float64Array(count);
 		const at = new Int32Array(count);
-		windowMinima(base.scaled, 1, clip(ends), scaled, at);
+		windowMinima(base.scaled, 1, clipped(ends, knownTo), scaled, at);
 		tracks.push({
 			...name,
 			limiter: limiterCode(limiter),

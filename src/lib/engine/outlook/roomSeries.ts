@@ -76,8 +76,12 @@ export function rainRoom(weather: SlotWeather): RoomSeries {
 	return result;
 }
 
+const filmRooms = new WeakMap<Float64Array, RoomSeries>();
+
 /** Film: broken while the face is wet, else the hours since it last was; unknown with the film. */
 export function filmRoom(film: Float64Array): RoomSeries {
+	const before = filmRooms.get(film);
+	if (before !== undefined) return before;
 	const scaled = new Float64Array(film.length);
 	let hours = Infinity;
 	for (let i = 0; i < film.length; i++) {
@@ -93,7 +97,9 @@ export function filmRoom(film: Float64Array): RoomSeries {
 			scaled[i] = Math.min(MOST_ROOM, hours);
 		}
 	}
-	return { value: film, scaled };
+	const result = { value: film, scaled };
+	filmRooms.set(film, result);
+	return result;
 }
 
 /** Direct sun on the face: in or out. */
@@ -141,12 +147,19 @@ export function distanceRoom(
 	return { value, scaled };
 }
 
+/** Kept by the error series, which belongs to one weather. */
+const sandRooms = new WeakMap<Float64Array, RoomSeries>();
+
 /** Distance of the gust below the gust that lifts sand; `value` is the gust, bounds differ by slot. */
 export function sandRoom(weather: SlotWeather, error: Float64Array): RoomSeries {
+	const before = sandRooms.get(error);
+	if (before !== undefined) return before;
 	const scaled = new Float64Array(error.length);
 	for (let i = 0; i < error.length; i++) {
 		const room = (weather.sandLiftGust[i] - weather.windGust[i]) / error[i];
 		scaled[i] = room > MOST_ROOM ? MOST_ROOM : room;
 	}
-	return { value: weather.windGust, scaled };
+	const result = { value: weather.windGust, scaled };
+	sandRooms.set(error, result);
+	return result;
 }

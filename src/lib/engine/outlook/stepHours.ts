@@ -23,11 +23,16 @@ export interface HoursOptions extends JudgeOptions {
 
 const PHASE_FLAGS = ['setPastEnd', 'extrapolated', 'standstill'] as const satisfies StepFlag[];
 
+/** Whether a mask marks any workable slot from the first start on. */
+function marksWorkable(mask: Uint8Array, state: Uint8Array, firstStart: number): boolean {
+	for (let i = Math.max(0, firstStart); i < mask.length; i++)
+		if (mask[i] === 1 && state[i] !== SHUT) return true;
+	return false;
+}
+
 function stepFlags(judgement: Judgement, state: Uint8Array, firstStart: number): StepFlag[] {
 	return PHASE_FLAGS.filter((flag) =>
-		judgement.phases.some((phase) =>
-			phase[flag].some((set, i) => set === 1 && i >= firstStart && state[i] !== SHUT)
-		)
+		judgement.phases.some((phase) => marksWorkable(phase[flag], state, firstStart))
 	);
 }
 

@@ -34,10 +34,11 @@ export function stretchesOf(
 ): { stretches: Stretch[]; best: BestHours | null } {
 	const { state, limiter, room } = states;
 	const count = state.length;
-	const rooms = Float64Array.from(room);
+	const rooms = new Float64Array(room);
 	const leastRoom = new Float64Array(count);
 	const leastAt = new Int32Array(count);
-	const ends = Int32Array.from({ length: count }, (_, i) => Math.min(i + durationSlots, count));
+	const ends = new Int32Array(count);
+	for (let i = 0; i < count; i++) ends[i] = Math.min(i + durationSlots, count);
 	windowMinima(rooms, 0, ends, leastRoom, leastAt);
 
 	const stretches: Stretch[] = [];
