@@ -14,12 +14,24 @@ const DEFAULT_PORT = 4173;
 const READY_MS = 120_000;
 const TSX = ['--import', 'tsx'];
 
+/** Ports of other services that the Fetch standard, and so every browser, refuses to open. */
+async function isRefusedByBrowsers(port) {
+	try {
+		await fetch(`http://127.0.0.1:${port}`);
+		return false;
+	} catch (error) {
+		return error.cause?.message === 'bad port';
+	}
+}
+
 /** The port asked for, or the usual one, or a free one where that is taken. */
 async function choosePort(asked) {
 	if (asked !== undefined) {
 		const port = Number(asked);
 		if (!Number.isInteger(port) || port < 1 || port > 65_535)
 			throw new Error(`PORT is ${asked}, which is not a port number (1 to 65535).`);
+		if (await isRefusedByBrowsers(port))
+			throw new Error(`Browsers refuse to open port ${port}. Set PORT to another.`);
 		if (!(await isFree(port))) throw new Error(`Port ${port} is in use. Set PORT to another.`);
 		return port;
 	}

@@ -130,16 +130,24 @@ test.describe('with less motion asked for', () => {
 	});
 });
 
-test.describe('with the text twice as large', () => {
-	test.use({ viewport: { width: 720, height: 450 } });
+for (const [screen, use] of Object.entries(SCREENS)) {
+	test.describe(`with the text twice as large on a ${screen}`, () => {
+		test.use(use);
 
-	test('nothing of the Hours page is cut off sideways, and the sentence stands first', async ({
-		page
-	}) => {
-		await signIn(page, 'owner');
-		await page.evaluate(() => (document.documentElement.style.fontSize = '200%'));
-		const wide = await page.evaluate(() => document.documentElement.scrollWidth);
-		expect(wide).toBe(720);
-		await expect(page.getByRole('heading', { level: 1 })).toBeInViewport();
+		test('neither the Hours page nor a reading is cut off sideways', async ({ page }) => {
+			await signIn(page, 'owner');
+			await page.evaluate(() => (document.documentElement.style.fontSize = '200%'));
+			const width = use.viewport.width;
+			const overflowing = (selector: string) =>
+				page.locator(selector).evaluate((it) => it.scrollWidth - it.clientWidth);
+			expect(await page.evaluate(() => document.documentElement.scrollWidth)).toBe(width);
+			await expect(page.getByRole('heading', { level: 1 })).toBeInViewport();
+			await battens(page).first().press('Enter');
+			await expect(page.getByRole('dialog').locator('tbody tr').first()).toBeVisible();
+			expect(await overflowing('dialog')).toBe(0);
+			await expect(page.getByRole('button', { name: 'Close the reading' })).toBeInViewport({
+				ratio: 1
+			});
+		});
 	});
-});
+}
