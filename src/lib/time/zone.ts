@@ -90,3 +90,9 @@ export function localHours(start: string, slotCount: number, timeZone: string): 
 export function sameClock(instant: Instant, one: string, other: string): boolean {
 	return dateAndClock(instant, one) === dateAndClock(instant, other);
 }
+
+/** "Wednesday" */
+export function weekday(instant: Instant, timeZone: string): string {
+	const time = typeof instant === 'string' ? Date.parse(instant) : instant;
+	return new Intl.DateTimeFormat('en-US', { timeZone, weekday: 'long' }).format(time);
+}

@@ -1,4 +1,4 @@
-import { formatInTimeZone, fromZonedTime } from 'date-fns-tz';
+import { fromZonedTime } from 'date-fns-tz';
 import { civilNights, sunUpSpans, type TimeSpan } from '../met/sun';
 import type { Site, WorkHours } from './site';
 import { SLOT_SECONDS, type SlotGrid } from './slots';
@@ -14,9 +14,23 @@ export interface LocalDay {
 
 const DAY_SECONDS = 86_400;
 
-/** The local date of an instant. */
+const dateFormats = new Map<string, Intl.DateTimeFormat>();
+
+/**
+ * The local date of an instant, yyyy-mm-dd. By `Intl`, whose answer does not depend on the zone
+ * this process itself runs in.
+ */
 export function localDate(timeZone: string, epochSeconds: number): string {
-	return formatInTimeZone(new Date(epochSeconds * 1000), timeZone, 'yyyy-MM-dd');
+	const format =
+		dateFormats.get(timeZone) ??
+		new Intl.DateTimeFormat('en-CA', {
+			timeZone,
+			year: 'numeric',
+			month: '2-digit',
+			day: '2-digit'
+		});
+	dateFormats.set(timeZone, format);
+	return format.format(epochSeconds * 1000);
 }
 
 /** The instant of a wall-clock time on a local date, UTC epoch seconds. */

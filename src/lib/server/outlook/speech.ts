@@ -1,8 +1,8 @@
-import { formatInTimeZone } from 'date-fns-tz';
 import type { Hours, HoursStep } from '../../api/hours';
 import { SLOT_SECONDS, type SlotWeather } from '../../engine';
 import type { HighWindDay, SpokenStep } from '../../sentences/headline';
 import { spokenBatten } from '../../sentences/spokenBatten';
+import { clock, weekday } from '../../time/zone';
 import { quantity, type Units } from '../../units/quantity';
 import type { QueuedStep } from '../db/queue';
 import type { Axis } from './axis';
@@ -25,7 +25,7 @@ export function spokenDayOf(
 	timeZone: string,
 	now: Date
 ): number {
-	const hour = Number(formatInTimeZone(now, timeZone, 'H'));
+	const hour = Number(clock(now.getTime(), timeZone).slice(0, 2));
 	const left = steps.some(({ bestByDay }) => bestByDay[0] !== null);
 	return left && hour < LAST_HOUR_OF_TODAY ? 0 : 1;
 }
@@ -36,7 +36,7 @@ const dayStartSlot = (axis: Axis, day: number): number =>
 export function dayName(axis: Axis, day: number, timeZone: string): string {
 	if (day === 0) return 'today';
 	if (day === 1) return 'tomorrow';
-	return formatInTimeZone(axis.days[day].start * 1000, timeZone, 'EEEE');
+	return weekday(axis.days[day].start * 1000, timeZone);
 }
 
 /** A step's facts on one day, for the sentences. */

@@ -1,6 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import {
 	daylightMask,
+	localDate,
 	localDays,
 	nights,
 	workMask
@@ -23,6 +24,16 @@ describe('local days', () => {
 			start: epoch('2026-10-24T23:00:00Z'),
 			slots: 100
 		});
+	});
+
+	test('dates do not depend on the zone this process runs in', () => {
+		const before = process.env.TZ;
+		process.env.TZ = 'Europe/Paris';
+		// 29 March 2026, 01:30 UTC: clocks spring forward in Paris at 01:00 UTC.
+		const date = localDate('America/New_York', epoch('2026-03-29T04:30:00Z'));
+		process.env.TZ = before;
+		expect(date).toBe('2026-03-29');
+		expect(localDate('Pacific/Auckland', epoch('2026-03-29T11:30:00Z'))).toBe('2026-03-30');
 	});
 
 	test('days follow each other without a gap, in zones off the hour too', () => {
