@@ -83,7 +83,8 @@ export {
 	standardPressure,
 	VARIABLE
 } from './outlook/weather';
-export { FACE_ORIENTATIONS, faceAzimuth, type FaceName } from './outlook/orientation';
+export { FACE_NAMES, FACE_ORIENTATIONS, faceAzimuth, type FaceName } from './outlook/orientation';
+export { WET_HOUR } from './outlook/roomSeries';
 export { stretchesOf } from './outlook/stretches';
 export type { SlotStates } from './outlook/judge';
 export { workWind } from './outlook/rooms';

@@ -1,3 +1,17 @@
+/** The sides of a boat that get coated. */
+export const FACE_NAMES = [
+	'topsides',
+	'bottom',
+	'transom',
+	'deck',
+	'coachroof',
+	'keel',
+	'rudder',
+	'driveLeg',
+	'propeller'
+] as const;
+export type FaceName = (typeof FACE_NAMES)[number];
+
 /**
  * How the faces of a boat look: tilt (0 up, 90 upright, 180 down) and bearing from the bow,
  * clockwise, in degrees; null for faces that look up. Usual hull forms (default, no source); a
@@ -13,8 +27,7 @@ export const FACE_ORIENTATIONS = {
 	rudder: { tilt: 90, bearing: { port: 270, starboard: 90, both: 90 }, bothSides: true },
 	driveLeg: { tilt: 90, bearing: { port: 270, starboard: 90, both: 90 }, bothSides: true },
 	propeller: { tilt: 90, bearing: { port: 180, starboard: 180, both: 180 }, bothSides: true }
-} as const;
-export type FaceName = keyof typeof FACE_ORIENTATIONS;
+} as const satisfies Record<FaceName, object>;
 
 /** Where a face looks, degrees from north clockwise, on a boat whose bow points at `heading`. */
 export function faceAzimuth(heading: number, bearing: number | null): number {

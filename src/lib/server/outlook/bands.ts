@@ -4,13 +4,11 @@ import {
 	SAND_STATES,
 	SLOT_FLAGS,
 	WET_FILM,
+	WET_HOUR,
 	type FaceConditions,
 	type SlotWeather
 } from '../../engine';
 import { spansWhere, type Axis, type Span } from './axis';
-
-/** An hour with this much rain or more is no dew, mm. */
-const RAIN = 0.1;
 
 const rounded = (value: number, decimals: number): number | null =>
 	Number.isFinite(value) ? Number(value.toFixed(decimals)) : null;
@@ -22,7 +20,7 @@ function dewSpans(face: FaceConditions, axis: Axis): Span[] {
 	return spansWhere(axis.slotCount, (i) => {
 		const slot = i + axis.offset;
 		const wet = face.film[slot] >= WET_FILM;
-		if (hourlyPrecipitation[slot] >= RAIN) raining = true;
+		if (hourlyPrecipitation[slot] >= WET_HOUR) raining = true;
 		else if (!wet) raining = false;
 		return wet && !raining;
 	});

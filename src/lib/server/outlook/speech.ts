@@ -1,5 +1,5 @@
 import type { Hours, HoursStep } from '../../api/hours';
-import { SLOT_SECONDS, type SlotWeather } from '../../engine';
+import { SLOT_SECONDS, WET_HOUR, type SlotWeather } from '../../engine';
 import type { HighWindDay, SpokenStep } from '../../sentences/headline';
 import { spokenBatten } from '../../sentences/spokenBatten';
 import { clock, weekday } from '../../time/zone';
@@ -11,7 +11,6 @@ import type { AxisHours } from './stepHours';
 
 /** From this hour on the day's work is behind: the sentence speaks of tomorrow. */
 const LAST_HOUR_OF_TODAY = 15;
-const WET_HOUR = 0.1;
 
 export const isoAt = (axis: Pick<Axis, 'start'>, slot: number): string =>
 	new Date((axis.start + slot * SLOT_SECONDS) * 1000).toISOString();

@@ -34,9 +34,9 @@ export function createTasks({ db, config, log, sessions }: Parts): TaskList {
 	return {
 		/** Hourly: lays each yard's refresh at its own minute of the hour. */
 		async spreadRefreshes(_, { addJob }) {
-			const hour = Date.now();
+			const from = Date.now();
 			for (const { id } of await allYards(db))
-				await addRefresh(addJob, id, new Date(hour + refreshOffsetSeconds(id) * 1000));
+				await addRefresh(addJob, id, new Date(from + refreshOffsetSeconds(id) * 1000));
 		},
 		async refreshForecast(payload, { addJob }) {
 			const { yardId } = ofYard.parse(payload);

@@ -10,7 +10,7 @@ import {
 	unique,
 	uuid
 } from 'drizzle-orm/pg-core';
-import { FINISHES, MATERIALS } from '../../../engine';
+import { FACE_NAMES, FINISHES, MATERIALS } from '../../../engine';
 import { users } from './people';
 import { stands, yards } from './yard';
 
@@ -46,18 +46,6 @@ export const boatPainters = pgTable(
 	},
 	(table) => [primaryKey({ columns: [table.boatId, table.userId] }), index().on(table.userId)]
 );
-
-export const FACE_NAMES = [
-	'topsides',
-	'bottom',
-	'transom',
-	'deck',
-	'coachroof',
-	'keel',
-	'rudder',
-	'driveLeg',
-	'propeller'
-] as const;
 
 /**
  * A side of a boat that gets coated. `tilt` in degrees (0 up, 90 upright, 180 down); `bearing` is
