@@ -8,7 +8,7 @@ import {
 	vapourPressureFromWetBulb,
 	wetBulbFromRelativeHumidity
 } from '../../src/lib/engine/met/humidity';
-import { standardPressure } from '../../src/lib/engine/outlook/weather';
+import { standardPressure } from '../../src/lib/engine/outlook/weather/weather';
 import { everyCase, has, near, num, type Ruling } from './cases';
 
 const celsius = (fahrenheit: number): number => ((fahrenheit - 32) * 5) / 9;

@@ -16,7 +16,7 @@ export {
 	type Face,
 	type Shelter,
 	type ShelterFactors
-} from './outlook/face';
+} from './outlook/face/face';
 export {
 	forecastSchema,
 	hourlySchema,
@@ -27,7 +27,7 @@ export {
 	type Hourly,
 	type HourlyVariable,
 	type Member
-} from './outlook/forecast';
+} from './outlook/weather/forecast';
 export {
 	looseSandSchema,
 	siteSchema,
@@ -35,14 +35,14 @@ export {
 	type LooseSand,
 	type Site,
 	type WorkHours
-} from './outlook/site';
+} from './outlook/weather/site';
 export {
 	SLOT_SECONDS,
 	type FaceConditions,
 	type SlotGrid,
 	type SlotWeather
-} from './outlook/slots';
-export { stepSchema, usualErrorsSchema, type Step, type UsualErrors } from './outlook/step';
+} from './outlook/weather/slots';
+export { stepSchema, usualErrorsSchema, type Step, type UsualErrors } from './outlook/hours/step';
 export {
 	LIMIT_NAMES,
 	LIMIT_UNITS,
@@ -57,17 +57,17 @@ export {
 	type SlotReading,
 	type StepHours,
 	type Stretch
-} from './outlook/result';
+} from './outlook/hours/result';
 
 export { cureClock, finishPosition, finishSlots, type CureClock } from './coating/cure';
 export { minutesAt, type ClockSide } from './coating/curve';
 export { MATERIAL_DEFAULTS, RUN_OFF_DEPTH, WET_FILM } from './met/materials';
-export { localDate, localDays, nights, type LocalDay } from './outlook/calendar';
-export { faceConditions } from './outlook/conditions';
-export { DEFAULT_USUAL_ERRORS } from './outlook/errors';
-export { flagBit, flagNames } from './outlook/flags';
-export { slotReading } from './outlook/reading';
-export { SHELTER_FACTORS } from './outlook/shelter';
+export { localDate, localDays, nights, type LocalDay } from './outlook/weather/calendar';
+export { faceConditions } from './outlook/face/conditions';
+export { DEFAULT_USUAL_ERRORS } from './outlook/hours/errors';
+export { flagBit, flagNames } from './outlook/weather/flags';
+export { slotReading } from './outlook/hours/reading';
+export { SHELTER_FACTORS } from './outlook/face/shelter';
 export {
 	durationSlotsOf,
 	ENGINE_VERSION,
@@ -75,16 +75,21 @@ export {
 	stepHours,
 	type HoursOptions,
 	type HoursRun
-} from './outlook/stepHours';
+} from './outlook/hours/stepHours';
 export {
 	missingVariables,
 	slotGrid,
 	slotWeather,
 	standardPressure,
 	VARIABLE
-} from './outlook/weather';
-export { FACE_NAMES, FACE_ORIENTATIONS, faceAzimuth, type FaceName } from './outlook/orientation';
-export { WET_HOUR } from './outlook/roomSeries';
-export { stretchesOf } from './outlook/stretches';
-export type { SlotStates } from './outlook/judge';
-export { workWind } from './outlook/rooms';
+} from './outlook/weather/weather';
+export {
+	FACE_NAMES,
+	FACE_ORIENTATIONS,
+	faceAzimuth,
+	type FaceName
+} from './outlook/face/orientation';
+export { WET_HOUR } from './outlook/hours/roomSeries';
+export { stretchesOf } from './outlook/hours/stretches';
+export type { SlotStates } from './outlook/hours/judge';
+export { workWind } from './outlook/hours/rooms';

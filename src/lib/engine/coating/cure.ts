@@ -1,4 +1,4 @@
-import { SLOT_SECONDS } from '../outlook/slots';
+import { SLOT_SECONDS } from '../outlook/weather/slots';
 import { logMinutesAt, outsideRows, timeCurve, type ClockSide } from './curve';
 import type { TimeTable } from './times';
 

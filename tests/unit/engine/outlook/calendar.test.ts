@@ -5,7 +5,7 @@ import {
 	localDays,
 	nights,
 	workMask
-} from '../../../../src/lib/engine/outlook/calendar';
+} from '../../../../src/lib/engine/outlook/weather/calendar';
 import { SITE } from './flatWeather';
 
 const epoch = (text: string): number => Date.parse(text) / 1000;

@@ -1,10 +1,10 @@
-import type { Face } from '../../../../src/lib/engine/outlook/face';
-import type { Forecast, HourlyVariable } from '../../../../src/lib/engine/outlook/forecast';
-import type { LooseSand, Site } from '../../../../src/lib/engine/outlook/site';
-import type { Step } from '../../../../src/lib/engine/outlook/step';
-import { faceConditions } from '../../../../src/lib/engine/outlook/conditions';
-import type { FaceConditions } from '../../../../src/lib/engine/outlook/slots';
-import { slotWeather } from '../../../../src/lib/engine/outlook/weather';
+import type { Face } from '../../../../src/lib/engine/outlook/face/face';
+import type { Forecast, HourlyVariable } from '../../../../src/lib/engine/outlook/weather/forecast';
+import type { LooseSand, Site } from '../../../../src/lib/engine/outlook/weather/site';
+import type { Step } from '../../../../src/lib/engine/outlook/hours/step';
+import { faceConditions } from '../../../../src/lib/engine/outlook/face/conditions';
+import type { FaceConditions } from '../../../../src/lib/engine/outlook/weather/slots';
+import { slotWeather } from '../../../../src/lib/engine/outlook/weather/weather';
 
 /** A made-up place and a kind day, from which each test changes the one thing it is about. */
 export const HOUR = 3600;

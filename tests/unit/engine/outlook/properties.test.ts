@@ -1,12 +1,12 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import type { Limits } from '../../../../src/lib/engine/coating/limits';
-import { faceConditions } from '../../../../src/lib/engine/outlook/conditions';
-import type { Forecast, HourlyVariable } from '../../../../src/lib/engine/outlook/forecast';
-import { slotReading } from '../../../../src/lib/engine/outlook/reading';
-import { stepHours } from '../../../../src/lib/engine/outlook/stepHours';
-import { slotWeather } from '../../../../src/lib/engine/outlook/weather';
-import { windowMinima } from '../../../../src/lib/engine/outlook/windows';
+import { faceConditions } from '../../../../src/lib/engine/outlook/face/conditions';
+import type { Forecast, HourlyVariable } from '../../../../src/lib/engine/outlook/weather/forecast';
+import { slotReading } from '../../../../src/lib/engine/outlook/hours/reading';
+import { stepHours } from '../../../../src/lib/engine/outlook/hours/stepHours';
+import { slotWeather } from '../../../../src/lib/engine/outlook/weather/weather';
+import { windowMinima } from '../../../../src/lib/engine/outlook/hours/windows';
 import { LIMITERS, STATES } from '../../../../src/lib/engine/vocabulary';
 import { COAT, forecastOf, HOUR, SITE, START, TOPSIDES } from './flatWeather';
 

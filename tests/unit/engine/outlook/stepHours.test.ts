@@ -1,7 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import type { Limits } from '../../../../src/lib/engine/coating/limits';
 import type { Times } from '../../../../src/lib/engine/coating/times';
-import { runsOf, stepHours } from '../../../../src/lib/engine/outlook/stepHours';
+import { runsOf, stepHours } from '../../../../src/lib/engine/outlook/hours/stepHours';
 import { LIMITERS, STATES } from '../../../../src/lib/engine/vocabulary';
 import {
 	COAT,

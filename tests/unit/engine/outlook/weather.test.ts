@@ -1,10 +1,10 @@
 import { describe, expect, test } from 'vitest';
-import { flagNames } from '../../../../src/lib/engine/outlook/flags';
+import { flagNames } from '../../../../src/lib/engine/outlook/weather/flags';
 import {
 	missingVariables,
 	slotWeather,
 	VARIABLE
-} from '../../../../src/lib/engine/outlook/weather';
+} from '../../../../src/lib/engine/outlook/weather/weather';
 import { forecastOf, HOUR, SITE, slotAt, START, type Changes } from './flatWeather';
 
 const weatherOf = (changes: Changes = {}) =>

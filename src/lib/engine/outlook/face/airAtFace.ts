@@ -3,11 +3,11 @@ import {
 	frostPointFromVapourPressure,
 	saturationPressureOverWater,
 	vapourDensity
-} from '../met/humidity';
-import { convection, vapourTransfer } from '../met/surface';
-import { logProfileFactor } from '../met/wind';
+} from '../../met/humidity';
+import { convection, vapourTransfer } from '../../met/surface';
+import { logProfileFactor } from '../../met/wind';
 import type { ShelterFactors } from './face';
-import { SLOT_SECONDS, type SlotWeather } from './slots';
+import { SLOT_SECONDS, type SlotWeather } from '../weather/slots';
 
 /** Ground roughness of a yard that states none, m (default, no source). */
 export const DEFAULT_ROUGHNESS = 0.03;

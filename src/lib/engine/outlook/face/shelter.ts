@@ -1,4 +1,4 @@
-import type { ShelterName } from '../vocabulary';
+import type { ShelterName } from '../../vocabulary';
 import type { Shelter, ShelterFactors } from './face';
 
 /** Presets of what a shelter does to the weather at a face. Rough, no source; a yard edits them. */

@@ -1,5 +1,5 @@
-import { WET_FILM } from '../met/materials';
-import { SLOT_SECONDS, type SlotWeather } from './slots';
+import { WET_FILM } from '../../met/materials';
+import { SLOT_SECONDS, type SlotWeather } from '../weather/slots';
 
 /**
  * Scaled rooms per slot of the limits that are not a plain distance to a number. 1 is one usual

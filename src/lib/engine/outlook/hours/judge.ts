@@ -1,12 +1,12 @@
-import { STATES } from '../vocabulary';
-import { daylightMask, workMask } from './calendar';
+import { STATES } from '../../vocabulary';
+import { daylightMask, workMask } from '../weather/calendar';
 import { errorSeries } from './errors';
-import { flagBit } from './flags';
+import { flagBit } from '../weather/flags';
 import { phaseTracks, type PhaseTracks } from './phases';
 import { applyTracks, limiterCode, type LimitTrack } from './rooms';
 import { BROKEN, MOST_ROOM } from './roomSeries';
-import type { Site } from './site';
-import type { FaceConditions, SlotGrid } from './slots';
+import type { Site } from '../weather/site';
+import type { FaceConditions, SlotGrid } from '../weather/slots';
 import type { Step, UsualErrors } from './step';
 
 export const SHUT = STATES.indexOf('shut');

@@ -1,4 +1,4 @@
-import { SLOT_FLAGS, type SlotFlag } from '../vocabulary';
+import { SLOT_FLAGS, type SlotFlag } from '../../vocabulary';
 
 /** The bit of a slot flag in a slot's flag word. */
 export function flagBit(flag: SlotFlag): number {

@@ -3,7 +3,7 @@ import {
 	cloudTransmission,
 	splitGlobal,
 	type LightSeries
-} from '../met/irradiance';
+} from '../../met/irradiance';
 import type { Hourly } from './forecast';
 import { valuesOf, type Periods } from './hours';
 import type { SlotGrid } from './slots';

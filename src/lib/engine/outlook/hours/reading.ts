@@ -1,13 +1,13 @@
-import { LIMITERS, STATES } from '../vocabulary';
-import { flagBit } from './flags';
+import { LIMITERS, STATES } from '../../vocabulary';
+import { flagBit } from '../weather/flags';
 import { judge, limiterAt, slotStates } from './judge';
 import type { LimitReading, Origin, SlotReading } from './result';
 import { BROKEN, MOST_ROOM } from './roomSeries';
 import type { LimitTrack } from './rooms';
 import { durationSlotsOf, type HoursOptions } from './stepHours';
 import { shutShortRuns } from './stretches';
-import type { Site } from './site';
-import { SLOT_SECONDS, type FaceConditions } from './slots';
+import type { Site } from '../weather/site';
+import { SLOT_SECONDS, type FaceConditions } from '../weather/slots';
 import type { Step } from './step';
 
 const orNull = (value: number): number | null => (Number.isFinite(value) ? value : null);

@@ -1,7 +1,7 @@
-import { gustAtHeight, meanAtHeight } from '../met/wind';
-import type { Limits } from '../coating/limits';
-import { LIMITERS, type Limiter } from '../vocabulary';
-import { DEFAULT_ROUGHNESS } from './airAtFace';
+import { gustAtHeight, meanAtHeight } from '../../met/wind';
+import type { Limits } from '../../coating/limits';
+import { LIMITERS, type Limiter } from '../../vocabulary';
+import { DEFAULT_ROUGHNESS } from '../face/airAtFace';
 import type { ErrorQuantity, ErrorSeries } from './errors';
 import type { LimitName, LimitUnit, Phase } from './result';
 import {
@@ -14,8 +14,8 @@ import {
 	trendRoom,
 	type RoomSeries
 } from './roomSeries';
-import type { Site } from './site';
-import type { FaceConditions } from './slots';
+import type { Site } from '../weather/site';
+import type { FaceConditions } from '../weather/slots';
 import type { Step } from './step';
 
 /**

@@ -1,4 +1,4 @@
-import { LIMITERS } from '../vocabulary';
+import { LIMITERS } from '../../vocabulary';
 import { SHUT, type SlotStates } from './judge';
 import type { BestHours, Stretch } from './result';
 import { BROKEN } from './roomSeries';

@@ -1,8 +1,8 @@
 import { z } from 'zod';
-import { limitsSchema } from '../coating/limits';
-import { timesSchema } from '../coating/times';
-import { METHODS, STEP_KINDS } from '../vocabulary';
-import { workHoursSchema } from './site';
+import { limitsSchema } from '../../coating/limits';
+import { timesSchema } from '../../coating/times';
+import { METHODS, STEP_KINDS } from '../../vocabulary';
+import { workHoursSchema } from '../weather/site';
 
 /** One step as the engine judges it. `workHours` absent: no hours limit; empty: never. */
 export const stepSchema = z.strictObject({

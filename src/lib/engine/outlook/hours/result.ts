@@ -1,4 +1,4 @@
-import type { Limiter, State, StepFlag } from '../vocabulary';
+import type { Limiter, State, StepFlag } from '../../vocabulary';
 
 /** A start that can be finished. Slot indices; `finish` is one past the last slot worked. */
 export interface BestHours {

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { FINISHES, MATERIALS, SHELTERS } from '../vocabulary';
+import { FINISHES, MATERIALS, SHELTERS } from '../../vocabulary';
 
 /**
  * One side of a boat, as the heat balance sees it.

@@ -1,13 +1,13 @@
-import { fillFaceIrradiance, skyView } from '../met/irradiance';
-import { STEFAN_BOLTZMANN } from '../met/longwave';
-import { MATERIAL_DEFAULTS, RUN_OFF_DEPTH } from '../met/materials';
-import { runSurface, type SurfaceBody, type SurfaceDrive } from '../met/surface';
+import { fillFaceIrradiance, skyView } from '../../met/irradiance';
+import { STEFAN_BOLTZMANN } from '../../met/longwave';
+import { MATERIAL_DEFAULTS, RUN_OFF_DEPTH } from '../../met/materials';
+import { runSurface, type SurfaceBody, type SurfaceDrive } from '../../met/surface';
 import { airAtFace, DEFAULT_ROUGHNESS } from './airAtFace';
 import type { Face, Shelter } from './face';
-import { flagBit } from './flags';
+import { flagBit } from '../weather/flags';
 import { shelterFactors } from './shelter';
-import type { Site } from './site';
-import { SLOT_SECONDS, type FaceConditions, type SlotWeather } from './slots';
+import type { Site } from '../weather/site';
+import { SLOT_SECONDS, type FaceConditions, type SlotWeather } from '../weather/slots';
 
 const KELVIN = 273.15;
 const DEFAULT_ALBEDO = 0.2;

@@ -1,9 +1,9 @@
-import { LIMITERS, STATES, type Limiter, type State, type StepFlag } from '../vocabulary';
+import { LIMITERS, STATES, type Limiter, type State, type StepFlag } from '../../vocabulary';
 import { judge, SHUT, slotStates, type JudgeOptions, type Judgement } from './judge';
 import type { StepHours } from './result';
 import { shutShortRuns, stretchesOf } from './stretches';
-import type { Site } from './site';
-import { SLOT_SECONDS, type FaceConditions } from './slots';
+import type { Site } from '../weather/site';
+import { SLOT_SECONDS, type FaceConditions } from '../weather/slots';
 import type { Step } from './step';
 
 /** Version of what the engine computes; part of the key under which outlooks are kept. */

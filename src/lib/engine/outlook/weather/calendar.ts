@@ -1,5 +1,5 @@
 import { fromZonedTime } from 'date-fns-tz';
-import { civilNights, sunUpSpans, type TimeSpan } from '../met/sun';
+import { civilNights, sunUpSpans, type TimeSpan } from '../../met/sun';
 import type { Site, WorkHours } from './site';
 import { SLOT_SECONDS, type SlotGrid } from './slots';
 

@@ -1,6 +1,6 @@
-import { dewPointFromRelativeHumidity, saturationPressureOverWater } from '../met/humidity';
-import { skyLongwave } from '../met/longwave';
-import { sunTrack } from '../met/sun';
+import { dewPointFromRelativeHumidity, saturationPressureOverWater } from '../../met/humidity';
+import { skyLongwave } from '../../met/longwave';
+import { sunTrack } from '../../met/sun';
 import { flagBit } from './flags';
 import type { Forecast, Hourly } from './forecast';
 import {

@@ -1,10 +1,10 @@
-import { cureClock, finishSlots, type CureClock } from '../coating/cure';
-import type { TimeName } from '../coating/times';
-import { WET_STEP_KINDS } from '../vocabulary';
+import { cureClock, finishSlots, type CureClock } from '../../coating/cure';
+import type { TimeName } from '../../coating/times';
+import { WET_STEP_KINDS } from '../../vocabulary';
 import type { ErrorSeries } from './errors';
 import { limiterCode, type LimitTrack } from './rooms';
 import { distanceRoom, filmRoom, rainRoom, sandRoom, type RoomSeries } from './roomSeries';
-import type { FaceConditions } from './slots';
+import type { FaceConditions } from '../weather/slots';
 import type { Step } from './step';
 import { windowMinima } from './windows';
 

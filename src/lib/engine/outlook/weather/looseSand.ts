@@ -3,11 +3,11 @@ import {
 	sandMoisture,
 	thresholdFrictionVelocity,
 	windOfFrictionVelocity
-} from '../met/sand';
-import { convection, vapourTransfer } from '../met/surface';
-import { vapourDensity } from '../met/humidity';
-import { inSector, logProfileFactor } from '../met/wind';
-import { SAND_STATES } from '../vocabulary';
+} from '../../met/sand';
+import { convection, vapourTransfer } from '../../met/surface';
+import { vapourDensity } from '../../met/humidity';
+import { inSector, logProfileFactor } from '../../met/wind';
+import { SAND_STATES } from '../../vocabulary';
 import type { LooseSand } from './site';
 import type { SlotWeather } from './slots';
 

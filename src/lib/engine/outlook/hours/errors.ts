@@ -1,7 +1,7 @@
-import type { SlotWeather } from './slots';
-import { SLOT_SECONDS } from './slots';
+import type { SlotWeather } from '../weather/slots';
+import { SLOT_SECONDS } from '../weather/slots';
 import type { UsualErrors } from './step';
-import { flagBit } from './flags';
+import { flagBit } from '../weather/flags';
 
 /**
  * Usual errors of a forecast at leads of 24, 48 and 72 h: K, K, K, K, %, m/s, m/s (defaults, no
