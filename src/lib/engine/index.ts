@@ -92,4 +92,4 @@ export {
 export { WET_HOUR } from './outlook/hours/roomSeries';
 export { stretchesOf } from './outlook/hours/stretches';
 export type { SlotStates } from './outlook/hours/judge';
-export { workWind } from './outlook/hours/rooms';
+export { workWind } from './outlook/hours/applyLimits';

@@ -85,23 +85,23 @@ describe('the cure clock', () => {
 	});
 
 	test('a coat at a constant row is through in exactly that row’s slots', () => {
-		const ends = finishSlots(cureClock(TABLE, steady(20), 'earliest'));
+		const ends = finishSlots(cureClock(TABLE, steady(20), 'earliest').progress);
 		expect(ends[0]).toBe(16);
 		expect(ends[40]).toBe(56);
 		expect(ends[90]).toBe(97);
 	});
 
 	test('the exact finish of a start between slots is between slots', () => {
-		const clock = cureClock([[20, 50]], steady(20), 'earliest');
-		expect(finishPosition(clock, 2)).toBeCloseTo(2 + 50 / 15, 9);
-		expect(finishPosition(clock, 2.5)).toBeCloseTo(2.5 + 50 / 15, 9);
-		expect(finishPosition(clock, 95)).toBeNull();
+		const { progress } = cureClock([[20, 50]], steady(20), 'earliest');
+		expect(finishPosition(progress, 2)).toBeCloseTo(2 + 50 / 15, 9);
+		expect(finishPosition(progress, 2.5)).toBeCloseTo(2.5 + 50 / 15, 9);
+		expect(finishPosition(progress, 95)).toBeNull();
 	});
 
 	test('under the least curing temperature only the earliest clock stands still', () => {
 		expect(cureClock(TABLE, steady(12), 'earliest', 14).progress[96]).toBe(0);
 		expect(cureClock(TABLE, steady(12), 'latest', 14).progress[96]).toBeGreaterThan(1);
-		expect(cureClock(TABLE, steady(12), 'earliest', 14).standstill[96]).toBe(96);
+		expect(cureClock(TABLE, steady(12), 'earliest', 14).standstill?.[96]).toBe(96);
 	});
 
 	test('an unknown temperature makes no progress and is counted, unless no temperature is asked for', () => {
@@ -109,7 +109,7 @@ describe('the cure clock', () => {
 		gap[3] = NaN;
 		const clock = cureClock(TABLE, gap, 'earliest');
 		expect(clock.progress[4]).toBe(clock.progress[3]);
-		expect(clock.unknown[8]).toBe(1);
-		expect(cureClock(60, gap, 'earliest').unknown[8]).toBe(0);
+		expect(clock.unknown?.[8]).toBe(1);
+		expect(cureClock(60, gap, 'earliest').unknown).toBeNull();
 	});
 });

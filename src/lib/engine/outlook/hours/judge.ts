@@ -1,13 +1,15 @@
 import { STATES } from '../../vocabulary';
 import { daylightMask, workMask } from '../weather/calendar';
-import { errorSeries } from './errors';
 import { flagBit } from '../weather/flags';
-import { phaseTracks, type PhaseTracks } from './phases';
-import { applyTracks, limiterCode, type LimitTrack } from './rooms';
-import { BROKEN, MOST_ROOM } from './roomSeries';
 import type { Site } from '../weather/site';
-import type { FaceConditions, SlotGrid } from '../weather/slots';
-import type { Step, UsualErrors } from './step';
+import type { FaceConditions, SlotGrid, SlotWeather } from '../weather/slots';
+import { applyLimits } from './applyLimits';
+import type { ErrorSeries } from './errors';
+import { leastRooms, limiterAt, limiterCode, takeLeast, type Limit } from './limit';
+import { dryingIsSilent, phaseLimits, type Phases } from './phases';
+import { BROKEN, MOST_ROOM } from './roomSeries';
+import type { Step } from './step';
+import { windowMinima } from './windows';
 
 export const SHUT = STATES.indexOf('shut');
 export const TIGHT = STATES.indexOf('tight');
@@ -16,27 +18,29 @@ export const OPEN = STATES.indexOf('open');
 /** A coarse stretch is at best tight. */
 const COARSE_ROOM = 0.99;
 
-export interface JudgeOptions {
-	readonly usualErrors?: UsualErrors;
-}
-
 /** Every limit of a step over the slots, before it is drawn together. */
 export interface Judgement {
-	readonly grid: SlotGrid;
-	readonly tracks: readonly LimitTrack[];
-	readonly phases: readonly PhaseTracks[];
-	/** 1 inside work hours and daylight; null where the step has no such limit. */
-	readonly work: Uint8Array | null;
-	readonly daylight: Uint8Array | null;
+	readonly weather: SlotWeather;
+	/** What must hold in the slot itself, of all faces. */
+	readonly apply: readonly Limit[];
+	/** What must hold afterwards, per face. */
+	readonly phases: readonly Phases[];
+	readonly masks: StepMasks;
 	readonly silentDrying: boolean;
 }
 
-const masks = new WeakMap<Site, Map<string, Uint8Array>>();
+/** 1 inside work hours and daylight; null where the step has no such limit. */
+export interface StepMasks {
+	readonly work: Uint8Array | null;
+	readonly daylight: Uint8Array | null;
+}
+
+const remembered = new WeakMap<Site, Map<string, Uint8Array>>();
 
 /** A mask of a site and grid, computed once for all steps that ask alike. */
 function remember(site: Site, key: string, make: () => Uint8Array): Uint8Array {
-	const ofSite = masks.get(site) ?? new Map<string, Uint8Array>();
-	masks.set(site, ofSite);
+	const ofSite = remembered.get(site) ?? new Map<string, Uint8Array>();
+	remembered.set(site, ofSite);
 	const before = ofSite.get(key);
 	if (before !== undefined) return before;
 	const mask = make();
@@ -44,38 +48,41 @@ function remember(site: Site, key: string, make: () => Uint8Array): Uint8Array {
 	return mask;
 }
 
-/** Judges every limit of a step on its faces. */
+/** Work hours and daylight of a step over a grid. */
+export function stepMasks({ workHours, limits }: Step, site: Site, grid: SlotGrid): StepMasks {
+	const span = `${grid.start} ${grid.count}`;
+	return {
+		work:
+			workHours === undefined
+				? null
+				: remember(site, `work ${span} ${JSON.stringify(workHours)}`, () =>
+						workMask(site.timeZone, workHours, grid)
+					),
+		daylight:
+			limits.daylight === true
+				? remember(site, `daylight ${span}`, () => daylightMask(site, grid))
+				: null
+	};
+}
+
+/**
+ * Judges every limit of a step on its faces.
+ *
+ * @param errors - usual errors on each face
+ */
 export function judge(
 	step: Step,
 	conditions: readonly FaceConditions[],
 	site: Site,
-	options: JudgeOptions = {}
+	errors: readonly ErrorSeries[]
 ): Judgement {
 	const { weather } = conditions[0];
-	const { grid } = weather;
-	const errors = errorSeries(weather, options.usualErrors);
-	const phases = conditions.map((face, index) => phaseTracks(step, face, index, errors));
-	const tracks = conditions.flatMap((face, index) => [
-		...applyTracks(step, face, index, site, errors),
-		...phases[index].tracks
-	]);
-	const span = `${grid.start} ${grid.count}`;
-	const hours = step.workHours;
 	return {
-		grid,
-		tracks,
-		phases,
-		work:
-			hours === undefined
-				? null
-				: remember(site, `work ${span} ${JSON.stringify(hours)}`, () =>
-						workMask(site.timeZone, hours, grid)
-					),
-		daylight:
-			step.limits.daylight === true
-				? remember(site, `daylight ${span}`, () => daylightMask(site, grid))
-				: null,
-		silentDrying: phases.some((phase) => phase.silentDrying)
+		weather,
+		apply: conditions.flatMap((face, i) => applyLimits(step, face, i, site, errors[i])),
+		phases: conditions.map((face, i) => phaseLimits(step, face, i, errors[i], null)),
+		masks: stepMasks(step, site, weather.grid),
+		silentDrying: dryingIsSilent(step)
 	};
 }
 
@@ -90,54 +97,75 @@ const NONE = limiterCode('none');
 const NO_DATA = limiterCode('noData');
 const HOURS = limiterCode('hours');
 const DARK = limiterCode('dark');
-const WET = limiterCode('wet');
-const FROST = limiterCode('frost');
 
-/** The limiter of a track at a slot: a film on a surface below freezing is frost. */
-export function limiterAt(track: LimitTrack, slot: number): number {
-	if (track.limiter !== WET || track.freezes === null) return track.limiter;
-	const at = track.at === null ? slot : track.at[slot];
-	return track.freezes[at] < 0 ? FROST : WET;
+/** For each slot and one more, the first marked slot from it on; past the end without one. */
+export function nextMarked(marks: Uint8Array): Int32Array {
+	const count = marks.length;
+	const next = new Int32Array(count + 1);
+	next[count] = count + 2;
+	for (let i = count - 1; i >= 0; i--) next[i] = marks[i] ? i : next[i + 1];
+	return next;
+}
+
+/** Ends no later than a slot. */
+function clipped(ends: Int32Array, most: number): Int32Array {
+	const out = new Int32Array(ends.length);
+	for (let i = 0; i < out.length; i++) out[i] = ends[i] < most ? ends[i] : most;
+	return out;
 }
 
 /**
- * Draws the tracks together. Limiter: a value missing in the slot itself, then hours, dark, then
+ * Draws the limits together. Limiter: a value missing in the slot itself, then hours, dark, then
  * the least scaled room, and last what lies past the forecast's end or in a gap ahead.
  */
-export function slotStates(
-	judgement: Judgement,
-	conditions: readonly FaceConditions[]
-): SlotStates {
-	const { count } = judgement.grid;
-	const { weather } = conditions[0];
-	const state = new Uint8Array(count);
+export function slotStates({ weather, apply, phases, masks, silentDrying }: Judgement): SlotStates {
+	const { count } = weather.grid;
+	const { knownFrom, knownTo } = weather;
+	const least = leastRooms(count);
 	const limiter = new Uint8Array(count);
-	const room = new Float32Array(count);
-	const least = new Float64Array(count).fill(Infinity);
-	const leastTrack = new Int16Array(count).fill(-1);
-	const missingNow = new Uint8Array(count);
-	const missingLater = new Uint8Array(count);
-	missingNow.fill(1, 0, Math.max(0, weather.knownFrom));
-	missingNow.fill(1, Math.min(count, weather.knownTo));
-	if (judgement.silentDrying) missingNow.fill(1);
-	judgement.tracks.forEach((track, index) => {
-		const { scaled } = track;
-		const missing = track.phase === 'apply' ? missingNow : missingLater;
-		for (let i = 0; i < count; i++) {
-			const value = scaled[i];
-			if (value < least[i]) {
-				least[i] = value;
-				leastTrack[i] = index;
-			} else if (value !== value) missing[i] = 1;
-		}
+	const missingNow = least.unknown;
+	apply.forEach((limit, index) => {
+		takeLeast(limit, index, least);
 	});
-	for (const { unknown } of judgement.phases) {
-		for (let i = 0; i < count; i++) missingLater[i] |= unknown[i];
+	// An open slot names the limit with the least room too.
+	for (let i = 0; i < count; i++)
+		limiter[i] = least.which[i] < 0 ? NONE : limiterAt(apply[least.which[i]], i);
+	missingNow.fill(1, 0, Math.max(0, knownFrom));
+	missingNow.fill(1, Math.min(count, knownTo));
+	if (silentDrying) missingNow.fill(1);
+
+	const missingLater = new Uint8Array(count);
+	const windowRoom = new Float64Array(count);
+	const windowAt = new Int32Array(count);
+	for (const { phases: ofFace, wetEnds } of phases) {
+		for (let i = 0; i < count; i++) if (wetEnds[i] > knownTo) missingLater[i] = 1;
+		for (const { limits, ends, needs } of ofFace) {
+			const group = leastRooms(count);
+			limits.forEach((limit, index) => {
+				takeLeast(limit, index, group);
+			});
+			if (needs !== null)
+				for (let i = 0; i < count; i++) if (needs[i] !== needs[i]) group.unknown[i] = 1;
+			const nextUnknown = nextMarked(group.unknown);
+			const known = clipped(ends, knownTo);
+			windowMinima(group.room, 1, known, windowRoom, windowAt);
+			for (let i = 0; i < count; i++) {
+				if (windowRoom[i] < least.room[i]) {
+					const at = windowAt[i];
+					least.room[i] = windowRoom[i];
+					limiter[i] = limiterAt(limits[group.which[at]], at);
+				}
+				if (nextUnknown[i + 1] < known[i]) missingLater[i] = 1;
+			}
+		}
 	}
+
+	const state = new Uint8Array(count);
+	const room = new Float32Array(count);
 	const coarse = flagBit('coarse');
-	const { work, daylight, tracks } = judgement;
+	const { work, daylight } = masks;
 	for (let i = 0; i < count; i++) {
-		const value = Math.min(least[i], MOST_ROOM);
+		const value = Math.min(least.room[i], MOST_ROOM);
 		if (missingNow[i]) {
 			limiter[i] = NO_DATA;
 			room[i] = NaN;
@@ -148,7 +176,6 @@ export function slotStates(
 			limiter[i] = DARK;
 			room[i] = BROKEN;
 		} else if (value < 0) {
-			limiter[i] = limiterAt(tracks[leastTrack[i]], i);
 			room[i] = value;
 		} else if (missingLater[i]) {
 			limiter[i] = NO_DATA;
@@ -156,7 +183,6 @@ export function slotStates(
 		} else {
 			const capped = weather.flags[i] & coarse ? Math.min(value, COARSE_ROOM) : value;
 			state[i] = capped < 1 ? TIGHT : OPEN;
-			limiter[i] = leastTrack[i] < 0 ? NONE : limiterAt(tracks[leastTrack[i]], i);
 			room[i] = capped;
 		}
 	}

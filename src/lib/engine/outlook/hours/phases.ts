@@ -1,42 +1,55 @@
-import { cureClock, finishSlots, type CureClock } from '../../coating/cure';
+import { cureClock, cureProgress, finishSlots, marked, type CureClock } from '../../coating/cure';
+import { rateTable, type RateTable } from '../../coating/rates';
 import type { TimeName } from '../../coating/times';
 import { WET_STEP_KINDS } from '../../vocabulary';
-import type { ErrorSeries } from './errors';
-import { limiterCode, type LimitTrack } from './rooms';
-import { distanceRoom, filmRoom, rainRoom, sandRoom, type RoomSeries } from './roomSeries';
 import type { FaceConditions } from '../weather/slots';
+import { sandCounts, sandLimit } from './applyLimits';
+import type { ErrorSeries } from './errors';
+import { limiterCode, type Limit } from './limit';
+import { filmRoom, rainRoom } from './roomSeries';
 import type { Step } from './step';
-import { windowMinima } from './windows';
 
-/** What the wet and set phases of a step on one face ask of each slot, were the last stroke laid at its end. */
-export interface PhaseTracks {
-	readonly tracks: readonly LimitTrack[];
-	/** 1 where the wet phase runs into something unknown, or past the forecast's end. */
-	readonly unknown: Uint8Array;
-	/** 1 where the set phase alone runs past the end. */
-	readonly setPastEnd: Uint8Array;
-	/** Slots of each phase whose clock was outside its rows, or stood still. */
-	readonly extrapolated: Uint8Array;
-	readonly standstill: Uint8Array;
-	/** The sheet states no drying time, and one is needed. */
-	readonly silentDrying: boolean;
-}
-
-/** Windows of a clock: the coat laid at the end of slot i is not there yet in [i + 1, ends[i]). */
-interface ClockWindow {
+/** Limits that must hold in every slot of [i + 1, ends[i]), were the last stroke laid at the end of slot i. */
+export interface PhaseLimits {
+	readonly limits: readonly Limit[];
 	readonly ends: Int32Array;
-	readonly clock: CureClock | null;
+	/** Surface temperatures the end depends on; an unknown one in the window makes the slot unknown. */
+	readonly needs: Float64Array | null;
 }
 
-function clockWindow(step: Step, name: TimeName, face: FaceConditions): ClockWindow | null {
-	const table = step.times[name];
-	if (table === undefined) return null;
-	const { count } = face.weather.grid;
-	// The tin sets no limit: done at once.
-	if (table === null) return { ends: nextSlots(count), clock: null };
-	// Earliest clocks run on the coldest spot.
-	const clock = cureClock(table, face.surfaceShaded, 'earliest', step.limits.curing?.min);
-	return { ends: finishSlots(clock).subarray(1), clock };
+/** What the wet and set phases of a step on one face ask. */
+export interface Phases {
+	readonly phases: readonly PhaseLimits[];
+	/** End of the wet phase, and of the set phase, after each slot; past the grid where it ends first. */
+	readonly wetEnds: Int32Array;
+	readonly setEnds: Int32Array;
+	/** Clocks that ran, with their ends; empty where they ran on rates alone. */
+	readonly clocks: readonly { readonly clock: CureClock; readonly ends: Int32Array }[];
+}
+
+/** How the clocks of a step run: exactly, or for the many members on tables of rates. */
+export type ClockRates = Readonly<Partial<Record<TimeName, RateTable>>>;
+
+const PHASE_TIMES = ['touchDry', 'keepDry', 'overcoatMin'] as const satisfies TimeName[];
+
+/** Tables of rates for the clocks of a step's wet and set phases. */
+export function phaseRates({ times }: Step): ClockRates {
+	return Object.fromEntries(
+		PHASE_TIMES.flatMap((name) => {
+			const table = times[name];
+			return table === undefined || table === null ? [] : [[name, rateTable(table, 'earliest')]];
+		})
+	);
+}
+
+/** The sheet states no drying time, and one is needed: every hour is shut for it. */
+export function dryingIsSilent({ times, limits, kind }: Step): boolean {
+	return (
+		times.touchDry === undefined &&
+		times.keepDry === undefined &&
+		limits.rainFree === true &&
+		WET_STEP_KINDS.includes(kind)
+	);
 }
 
 /** Ends of the empty window after each slot: nothing to wait for. */
@@ -47,160 +60,152 @@ function nextSlots(count: number): Int32Array {
 }
 
 /** The later of two ends, slot by slot. */
-function later(a: Int32Array, b: Int32Array): Int32Array {
+function later(a: Int32Array, b: Int32Array | null): Int32Array {
+	if (b === null || a === b) return a;
 	const ends = new Int32Array(a.length);
 	for (let i = 0; i < ends.length; i++) ends[i] = a[i] > b[i] ? a[i] : b[i];
 	return ends;
 }
 
-/** Ends no later than a slot. */
-function clipped(ends: Int32Array, most: number): Int32Array {
-	const out = new Int32Array(ends.length);
-	for (let i = 0; i < out.length; i++) out[i] = ends[i] < most ? ends[i] : most;
-	return out;
-}
+const WET = {
+	phase: 'wet',
+	error: null,
+	bound: null,
+	rooms: null,
+	freezes: null,
+	modelled: true
+} as const;
 
-/** The wet and set phase tracks of a step on one face. */
-export function phaseTracks(
+/** The limits of the wet and set phases of a step on one face. */
+export function phaseLimits(
 	step: Step,
 	face: FaceConditions,
 	faceIndex: number,
-	errors: ErrorSeries
-): PhaseTracks {
+	errors: ErrorSeries,
+	rates: ClockRates | null
+): Phases {
 	const { count } = face.weather.grid;
-	const { knownTo } = face.weather;
-	const { limits } = step;
-	const touch = clockWindow(step, 'touchDry', face);
-	const keep = clockWindow(step, 'keepDry', face);
-	const over = clockWindow(step, 'overcoatMin', face);
+	const { limits, times } = step;
 	const none = nextSlots(count);
-	const wetEnds = later(touch?.ends ?? none, keep?.ends ?? none);
-	const touchEnds = (touch ?? keep)?.ends ?? none;
-	const setEnds = later(over?.ends ?? none, wetEnds);
-
-	const tracks: LimitTrack[] = [];
-	const windowed = (
-		name: Pick<
-			LimitTrack,
-			'limit' | 'phase' | 'side' | 'unit' | 'bound' | 'error' | 'freezes' | 'modelled'
-		>,
-		limiter: Parameters<typeof limiterCode>[0],
-		base: RoomSeries,
-		ends: Int32Array
-	): void => {
-		const scaled = new Float64Array(count);
-		const at = new Int32Array(count);
-		windowMinima(base.scaled, 1, clipped(ends, knownTo), scaled, at);
-		tracks.push({
-			...name,
-			limiter: limiterCode(limiter),
-			value: base.value,
-			scaled,
-			at,
-			face,
-			faceIndex
-		});
+	const curingMin = limits.curing?.min ?? -Infinity;
+	const clocks: { clock: CureClock; ends: Int32Array }[] = [];
+	// Earliest clocks run on the coldest spot.
+	const endsOf = (name: (typeof PHASE_TIMES)[number]): Int32Array | null => {
+		const table = times[name];
+		if (table === undefined) return null;
+		// The tin sets no limit: done at once.
+		if (table === null) return none;
+		const quick = rates?.[name];
+		if (quick !== undefined)
+			return finishSlots(cureProgress(quick, face.surfaceShaded, curingMin)).subarray(1);
+		const clock = cureClock(table, face.surfaceShaded, 'earliest', curingMin);
+		const ends = finishSlots(clock.progress).subarray(1);
+		clocks.push({ clock, ends });
+		return ends;
 	};
-	const wet = { phase: 'wet', error: null, freezes: null, modelled: false } as const;
+	const touch = endsOf('touchDry');
+	const keep = endsOf('keepDry');
+	const over = endsOf('overcoatMin');
+	const wetEnds = later(touch ?? none, keep);
+	const touchEnds = touch ?? keep ?? none;
+	const setEnds = later(wetEnds, over);
 	const drying = touch !== null || keep !== null;
+
+	const at = { face, faceIndex };
+	const wet: Limit[] = [];
+	const untilTouch: Limit[] = [];
+	const set: Limit[] = [];
+	const spread = {
+		...WET,
+		...at,
+		limit: 'spread',
+		limiter: limiterCode('dew'),
+		side: 'least',
+		unit: 'kelvin',
+		value: face.spread,
+		error: errors.spread
+	} as const;
 	if (drying && limits.rainFree === true && face.rainReaches) {
-		windowed(
-			{ ...wet, limit: 'rain', side: 'most', unit: 'millimetres', bound: null },
-			'rain',
-			rainRoom(face.weather),
-			wetEnds
-		);
+		wet.push({
+			...WET,
+			...at,
+			...rainRoom(face.weather),
+			limit: 'rain',
+			limiter: limiterCode('rain'),
+			side: 'most',
+			unit: 'millimetres',
+			modelled: false
+		});
 	}
 	if (drying && (limits.rainFree === true || limits.drySurface === true)) {
-		const frozen = { ...wet, freezes: face.surfaceShaded, modelled: true };
-		windowed(
-			{ ...frozen, limit: 'film', side: 'most', unit: 'millimetres', bound: null },
-			'wet',
-			filmRoom(face.film),
-			wetEnds
-		);
+		wet.push({
+			...WET,
+			...at,
+			...filmRoom(face.film),
+			limit: 'film',
+			limiter: limiterCode('wet'),
+			side: 'most',
+			unit: 'millimetres',
+			freezes: face.surfaceShaded
+		});
 	}
-	if (drying && limits.sand === 'none' && face.dustReaches && face.weather.sandStated) {
-		const gust = { ...wet, error: errors.gust, modelled: true };
-		windowed(
-			{
-				...gust,
-				limit: 'sand',
-				side: 'most',
-				unit: 'metresPerSecond',
-				bound: face.weather.sandLiftGust
-			},
-			'sand',
-			sandRoom(face.weather, errors.gust),
-			touchEnds
-		);
-	}
+	if (drying && sandCounts(step, face))
+		untilTouch.push({
+			...WET,
+			...at,
+			limiter: limiterCode('sand'),
+			...sandLimit(face, errors)
+		});
 	if (drying && limits.spread !== undefined) {
-		const kelvin = {
-			...wet,
-			limit: 'spread',
-			side: 'least',
-			unit: 'kelvin',
-			error: errors.spread,
-			modelled: true
-		} as const;
-		windowed(
-			{ ...kelvin, bound: 0 },
-			'dew',
-			distanceRoom(face.spread, 0, 'least', errors.spread),
-			wetEnds
-		);
-		if (limits.spread.untilDry === true) {
-			const { min } = limits.spread;
-			windowed(
-				{ ...kelvin, bound: min },
-				'dew',
-				distanceRoom(face.spread, min, 'least', errors.spread),
-				touchEnds
-			);
-		}
+		wet.push({ ...spread, bound: 0 });
+		if (limits.spread.untilDry === true) untilTouch.push({ ...spread, bound: limits.spread.min });
 	}
-	if (limits.curing !== undefined && (drying || over !== null)) {
-		const { min } = limits.curing;
-		const base = distanceRoom(face.surfaceShaded, min, 'least', errors.surfaceTemperature);
-		const celsius = {
+	if (limits.curing !== undefined) {
+		const curing = {
+			...WET,
+			...at,
 			limit: 'curing',
+			limiter: limiterCode('cold'),
 			side: 'least',
 			unit: 'celsius',
-			bound: min,
-			error: errors.surfaceTemperature,
-			freezes: null,
-			modelled: true
+			value: face.surfaceShaded,
+			bound: limits.curing.min,
+			error: errors.surfaceTemperature
 		} as const;
-		if (drying) windowed({ ...celsius, phase: 'wet' }, 'cold', base, wetEnds);
-		if (over !== null) windowed({ ...celsius, phase: 'set' }, 'cold', base, setEnds);
+		if (drying) wet.push(curing);
+		if (over !== null) set.push({ ...curing, phase: 'set' });
 	}
+	// A constant time on no curing minimum asks for no temperature.
+	const asksTemperature = (['touchDry', 'keepDry'] as const).some((name) => {
+		const table = times[name] ?? null;
+		return table !== null && (typeof table !== 'number' || limits.curing !== undefined);
+	});
+	return {
+		phases: [
+			{ limits: wet, ends: wetEnds, needs: asksTemperature ? face.surfaceShaded : null },
+			{ limits: untilTouch, ends: touchEnds, needs: null },
+			{ limits: set, ends: setEnds, needs: null }
+		].filter((phase) => phase.limits.length > 0 || phase.needs !== null),
+		wetEnds,
+		setEnds,
+		clocks
+	};
+}
 
-	const unknown = new Uint8Array(count);
-	const setPastEnd = new Uint8Array(count);
-	const extrapolated = new Uint8Array(count);
-	const standstill = new Uint8Array(count);
-	for (let i = 0; i < count; i++) {
-		if (wetEnds[i] > knownTo) unknown[i] = 1;
-		else if (setEnds[i] > knownTo) setPastEnd[i] = 1;
-	}
-	for (const window of [touch, keep, over]) {
-		if (window === null || window.clock === null) continue;
-		const { clock, ends } = window;
-		for (let i = 0; i < count; i++) {
-			const from = i + 1;
-			const end = Math.min(ends[i], count, Math.max(knownTo, from));
-			if (window !== over && clock.unknown[end] > clock.unknown[from]) unknown[i] = 1;
-			if (clock.extrapolated[end] > clock.extrapolated[from]) extrapolated[i] = 1;
-			if (clock.standstill[end] > clock.standstill[from]) standstill[i] = 1;
+/** 1 per slot after which a clock ran through a mark before its end. */
+export function runsThrough(
+	{ clocks }: Phases,
+	mark: 'extrapolated' | 'standstill',
+	knownTo: number
+): Uint8Array | null {
+	let mask: Uint8Array | null = null;
+	for (const { clock, ends } of clocks) {
+		if (clock[mark] === null) continue;
+		mask ??= new Uint8Array(ends.length);
+		for (let i = 0; i < ends.length; i++) {
+			const end = Math.min(ends[i], ends.length, Math.max(knownTo, i + 1));
+			if (marked(clock[mark], i + 1, end)) mask[i] = 1;
 		}
 	}
-	return {
-		tracks,
-		unknown,
-		setPastEnd,
-		extrapolated,
-		standstill,
-		silentDrying: !drying && limits.rainFree === true && WET_STEP_KINDS.includes(step.kind)
-	};
+	return mask;
 }

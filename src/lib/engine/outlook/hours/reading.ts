@@ -1,10 +1,10 @@
 import { LIMITERS, STATES } from '../../vocabulary';
 import { flagBit } from '../weather/flags';
-import { judge, limiterAt, slotStates } from './judge';
+import { judge, slotStates } from './judge';
+import { limiterAt, roomAt, type Limit } from './limit';
 import type { LimitReading, Origin, SlotReading } from './result';
 import { BROKEN, MOST_ROOM } from './roomSeries';
-import type { LimitTrack } from './rooms';
-import { durationSlotsOf, type HoursOptions } from './stepHours';
+import { durationSlotsOf, errorsOf, type HoursOptions } from './stepHours';
 import { shutShortRuns } from './stretches';
 import type { Site } from '../weather/site';
 import { SLOT_SECONDS, type FaceConditions } from '../weather/slots';
@@ -12,44 +12,58 @@ import type { Step } from './step';
 
 const orNull = (value: number): number | null => (Number.isFinite(value) ? value : null);
 
-function originOf(track: LimitTrack, at: number): Origin {
-	const word = track.face.flags[at];
+function originOf(limit: Limit, at: number): Origin {
+	const word = limit.face.flags[at];
 	if (word & flagBit('measured')) return 'measured';
-	if (track.modelled && word & flagBit('assumed')) return 'assumed';
-	if (track.modelled) return 'derived';
-	if (track.limit === 'gust' && track.face.weather.gustDerived[at]) return 'derived';
+	if (limit.modelled && word & flagBit('assumed')) return 'assumed';
+	if (limit.modelled) return 'derived';
+	if (limit.limit === 'gust' && limit.face.weather.gustDerived[at]) return 'derived';
 	return 'forecast';
 }
 
-function readTrack(track: LimitTrack, slot: number): LimitReading {
-	const { grid } = track.face.weather;
-	const at = Math.min(track.at === null ? slot : track.at[slot], grid.count - 1);
-	const scaled = track.scaled[slot];
-	const value = orNull(track.value[at]);
+/** A limit held at a slot with a scaled room, which a wet or set check may take from a later slot. */
+function readLimit(limit: Limit, at: number, scaled: number): LimitReading {
+	const { grid } = limit.face.weather;
+	const value = orNull(limit.value[at]);
 	const bound =
-		track.bound === null || typeof track.bound === 'number' ? track.bound : orNull(track.bound[at]);
+		limit.bound === null || typeof limit.bound === 'number' ? limit.bound : orNull(limit.bound[at]);
 	const distance =
-		value === null || bound === null || track.side === 'in'
+		value === null || bound === null
 			? null
-			: track.side === 'least'
+			: limit.side === 'least'
 				? value - bound
 				: bound - value;
 	return {
-		limit: track.limit,
-		limiter: LIMITERS[limiterAt(track, slot)],
-		phase: track.phase,
-		faceIndex: track.faceIndex,
+		limit: limit.limit,
+		limiter: LIMITERS[limiterAt(limit, at)],
+		phase: limit.phase,
+		faceIndex: limit.faceIndex,
 		value,
 		bound,
-		side: track.side,
-		unit: track.unit,
+		side: limit.side,
+		unit: limit.unit,
 		room: distance,
 		scaledRoom: Number.isNaN(scaled) ? null : Math.min(scaled, MOST_ROOM),
-		usualError: track.error === null ? null : track.error[at],
+		usualError: limit.error === null ? null : limit.error[at],
 		holds: scaled >= 0,
-		origin: originOf(track, at),
+		origin: originOf(limit, at),
 		at: grid.start + at * SLOT_SECONDS
 	};
+}
+
+/** The slot of [from, to) in which a limit binds: the least room; an unknown one where none is broken. */
+function bindingSlot(limit: Limit, from: number, to: number): { at: number; scaled: number } {
+	let at = from;
+	let scaled = Infinity;
+	let unknown = -1;
+	for (let i = from; i < to; i++) {
+		const room = roomAt(limit, i);
+		if (room < scaled) {
+			scaled = room;
+			at = i;
+		} else if (room !== room && unknown < 0) unknown = i;
+	}
+	return unknown >= 0 && !(scaled < 0) ? { at: unknown, scaled: NaN } : { at, scaled };
 }
 
 /**
@@ -72,10 +86,11 @@ export function slotReading(
 	slot: number,
 	options: HoursOptions = {}
 ): SlotReading {
-	const judgement = judge(step, conditions, site, options);
-	const states = slotStates(judgement, conditions);
+	const judgement = judge(step, conditions, site, errorsOf(conditions, options));
+	const states = slotStates(judgement);
 	shutShortRuns(states, durationSlotsOf(step.durationMinutes));
-	const { grid, work, daylight } = judgement;
+	const { grid, knownTo } = judgement.weather;
+	const { work, daylight } = judgement.masks;
 	const at = grid.start + slot * SLOT_SECONDS;
 	const inOrOut = (limit: 'hours' | 'daylight' | 'dryingTime', holds: boolean): LimitReading => ({
 		limit,
@@ -102,7 +117,16 @@ export function slotReading(
 	if (work !== null) put(inOrOut('hours', work[slot] === 1));
 	if (daylight !== null) put(inOrOut('daylight', daylight[slot] === 1));
 	if (judgement.silentDrying) put(inOrOut('dryingTime', false));
-	for (const track of judgement.tracks) put(readTrack(track, slot));
+	for (const limit of judgement.apply) put(readLimit(limit, slot, roomAt(limit, slot)));
+	for (const { phases } of judgement.phases) {
+		for (const { limits, ends } of phases) {
+			const end = Math.min(ends[slot], knownTo);
+			for (const limit of limits) {
+				const { at, scaled } = bindingSlot(limit, slot + 1, end);
+				put(readLimit(limit, Math.min(at, grid.count - 1), scaled));
+			}
+		}
+	}
 	return {
 		slot,
 		state: STATES[states.state[slot]],

@@ -29,6 +29,12 @@ export interface StepHours {
 	/** Least scaled room, at most 3; negative when broken, NaN when unknown. */
 	readonly room: Float32Array;
 	readonly stretches: readonly Stretch[];
+	/**
+	 * Least room over the slots of a whole duration begun in each slot, and the slot that binds;
+	 * of starts inside a stretch only.
+	 */
+	readonly startRoom: Float64Array;
+	readonly bindsAt: Int32Array;
 	/** The start with the most room over all stretches; null without a stretch. */
 	readonly best: BestHours | null;
 	readonly flags: readonly StepFlag[];

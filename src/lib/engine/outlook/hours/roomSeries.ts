@@ -21,9 +21,10 @@ const RAIN_HOURS_SCALE = 3;
 export const DIRECT_SUN = 20;
 const TREND_SLOTS = 3600 / SLOT_SECONDS;
 
+/** A rule's own values and the scaled rooms made of them. */
 export interface RoomSeries {
 	readonly value: Float64Array;
-	readonly scaled: Float64Array;
+	readonly rooms: Float64Array;
 }
 
 /** Hours from each slot's start to the nearest wet hour, before or after; +Infinity without one. */
@@ -54,24 +55,24 @@ export function rainRoom(weather: SlotWeather): RoomSeries {
 	const { hourlyPrecipitation, precipitationProbability } = weather;
 	const count = hourlyPrecipitation.length;
 	const value = new Float64Array(count);
-	const scaled = new Float64Array(count);
+	const rooms = new Float64Array(count);
 	const nearest = hoursToRain(hourlyPrecipitation);
 	for (let i = 0; i < count; i++) {
 		const amount = hourlyPrecipitation[i];
 		const chance = precipitationProbability[i];
 		const chanceKnown = chance === chance;
 		value[i] = amount;
-		if (amount !== amount) scaled[i] = NaN;
-		else if (amount >= WET_HOUR) scaled[i] = BROKEN;
+		if (amount !== amount) rooms[i] = NaN;
+		else if (amount >= WET_HOUR) rooms[i] = BROKEN;
 		else if (chanceKnown) {
 			// At 50 % the room is nought and shut all the same.
-			scaled[i] =
+			rooms[i] =
 				chance >= SHUT_CHANCE
 					? Math.min(-0.01, (SHUT_CHANCE - chance) / CHANCE_SCALE)
 					: (SHUT_CHANCE - chance) / CHANCE_SCALE;
-		} else scaled[i] = Math.min(MOST_ROOM, nearest[i] / RAIN_HOURS_SCALE);
+		} else rooms[i] = Math.min(MOST_ROOM, nearest[i] / RAIN_HOURS_SCALE);
 	}
-	const result = { value, scaled };
+	const result = { value, rooms };
 	rainRooms.set(weather, result);
 	return result;
 }
@@ -82,84 +83,45 @@ const filmRooms = new WeakMap<Float64Array, RoomSeries>();
 export function filmRoom(film: Float64Array): RoomSeries {
 	const before = filmRooms.get(film);
 	if (before !== undefined) return before;
-	const scaled = new Float64Array(film.length);
+	const rooms = new Float64Array(film.length);
 	let hours = Infinity;
 	for (let i = 0; i < film.length; i++) {
 		const depth = film[i];
 		if (depth !== depth) {
-			scaled[i] = NaN;
+			rooms[i] = NaN;
 			hours = 0;
 		} else if (depth >= WET_FILM) {
-			scaled[i] = BROKEN;
+			rooms[i] = BROKEN;
 			hours = 0;
 		} else {
 			hours += HOURS_PER_SLOT;
-			scaled[i] = Math.min(MOST_ROOM, hours);
+			rooms[i] = Math.min(MOST_ROOM, hours);
 		}
 	}
-	const result = { value: film, scaled };
+	const result = { value: film, rooms };
 	filmRooms.set(film, result);
 	return result;
 }
 
 /** Direct sun on the face: in or out. */
 export function directSunRoom(beam: Float64Array): RoomSeries {
-	const scaled = new Float64Array(beam.length);
+	const rooms = new Float64Array(beam.length);
 	for (let i = 0; i < beam.length; i++) {
 		const light = beam[i];
-		scaled[i] = light !== light ? NaN : light > DIRECT_SUN ? BROKEN : MOST_ROOM;
+		rooms[i] = light !== light ? NaN : light > DIRECT_SUN ? BROKEN : MOST_ROOM;
 	}
-	return { value: beam, scaled };
+	return { value: beam, rooms };
 }
 
 /** Trend of the shaded face against an hour before, K/h: in or out. */
 export function trendRoom(surface: Float64Array, asked: 'falling' | 'rising'): RoomSeries {
 	const value = new Float64Array(surface.length).fill(NaN);
-	const scaled = new Float64Array(surface.length).fill(NaN);
+	const rooms = new Float64Array(surface.length).fill(NaN);
 	for (let i = TREND_SLOTS; i < surface.length; i++) {
 		const change = surface[i] - surface[i - TREND_SLOTS];
 		value[i] = change;
 		if (change === change)
-			scaled[i] = (asked === 'falling' ? change <= 0 : change >= 0) ? MOST_ROOM : BROKEN;
+			rooms[i] = (asked === 'falling' ? change <= 0 : change >= 0) ? MOST_ROOM : BROKEN;
 	}
-	return { value, scaled };
-}
-
-/** A mask of slots that are in (1) or out. */
-export function maskRoom(mask: Uint8Array): RoomSeries {
-	const scaled = Float64Array.from(mask, (inside) => (inside ? MOST_ROOM : BROKEN));
-	return { value: scaled, scaled };
-}
-
-/** Distance to a bound in usual errors; `side` says whether the bound is the least or the most. */
-export function distanceRoom(
-	value: Float64Array,
-	bound: number,
-	side: 'least' | 'most',
-	error: Float64Array
-): RoomSeries {
-	const scaled = new Float64Array(value.length);
-	const sign = side === 'least' ? 1 : -1;
-	for (let i = 0; i < value.length; i++) {
-		const room = (sign * (value[i] - bound)) / error[i];
-		scaled[i] = room > MOST_ROOM ? MOST_ROOM : room;
-	}
-	return { value, scaled };
-}
-
-/** Kept by the error series, which belongs to one weather. */
-const sandRooms = new WeakMap<Float64Array, RoomSeries>();
-
-/** Distance of the gust below the gust that lifts sand; `value` is the gust, bounds differ by slot. */
-export function sandRoom(weather: SlotWeather, error: Float64Array): RoomSeries {
-	const before = sandRooms.get(error);
-	if (before !== undefined) return before;
-	const scaled = new Float64Array(error.length);
-	for (let i = 0; i < error.length; i++) {
-		const room = (weather.sandLiftGust[i] - weather.windGust[i]) / error[i];
-		scaled[i] = room > MOST_ROOM ? MOST_ROOM : room;
-	}
-	const result = { value: weather.windGust, scaled };
-	sandRooms.set(error, result);
-	return result;
+	return { value, rooms };
 }

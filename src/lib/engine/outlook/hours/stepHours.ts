@@ -1,10 +1,12 @@
 import { LIMITERS, STATES, type Limiter, type State, type StepFlag } from '../../vocabulary';
-import { judge, SHUT, slotStates, type JudgeOptions, type Judgement } from './judge';
+import { errorSeries, type ErrorSeries } from './errors';
+import { judge, SHUT, slotStates, type Judgement } from './judge';
+import { runsThrough, type Phases } from './phases';
 import type { StepHours } from './result';
 import { shutShortRuns, stretchesOf } from './stretches';
 import type { Site } from '../weather/site';
 import { SLOT_SECONDS, type FaceConditions } from '../weather/slots';
-import type { Step } from './step';
+import type { Step, UsualErrors } from './step';
 
 /** Version of what the engine computes; part of the key under which outlooks are kept. */
 export const ENGINE_VERSION = '1';
@@ -16,23 +18,50 @@ export function durationSlotsOf(durationMinutes: number): number {
 	return Math.max(1, Math.ceil(durationMinutes / SLOT_MINUTES - 1e-9));
 }
 
-export interface HoursOptions extends JudgeOptions {
+export interface HoursOptions {
+	/** Instead of the default usual errors of a forecast. */
+	readonly usualErrors?: UsualErrors;
+	/** Usual errors on each face, where members tell them; instead of those by lead. */
+	readonly errors?: readonly ErrorSeries[];
 	/** UTC epoch seconds; no start before it. */
 	readonly from?: number;
 }
 
-const PHASE_FLAGS = ['setPastEnd', 'extrapolated', 'standstill'] as const satisfies StepFlag[];
+/** The usual errors on each face: as given, else by lead. */
+export function errorsOf(
+	conditions: readonly FaceConditions[],
+	{ errors, usualErrors }: HoursOptions
+): readonly ErrorSeries[] {
+	if (errors !== undefined) return errors;
+	const byLead = errorSeries(conditions[0].weather, usualErrors);
+	return conditions.map(() => byLead);
+}
 
 /** Whether a mask marks any workable slot from the first start on. */
-function marksWorkable(mask: Uint8Array, state: Uint8Array, firstStart: number): boolean {
+function marksWorkable(mask: Uint8Array | null, state: Uint8Array, firstStart: number): boolean {
+	if (mask === null) return false;
 	for (let i = Math.max(0, firstStart); i < mask.length; i++)
 		if (mask[i] === 1 && state[i] !== SHUT) return true;
 	return false;
 }
 
-function stepFlags(judgement: Judgement, state: Uint8Array, firstStart: number): StepFlag[] {
-	return PHASE_FLAGS.filter((flag) =>
-		judgement.phases.some((phase) => marksWorkable(phase[flag], state, firstStart))
+/** 1 per slot whose set phase alone runs past the end of the forecast. */
+function setPastEnd({ wetEnds, setEnds }: Phases, knownTo: number): Uint8Array {
+	return Uint8Array.from(setEnds, (end, i) => (end > knownTo && wetEnds[i] <= knownTo ? 1 : 0));
+}
+
+function stepFlags(
+	{ phases, weather: { knownTo } }: Judgement,
+	state: Uint8Array,
+	firstStart: number
+): StepFlag[] {
+	const marks = {
+		setPastEnd,
+		extrapolated: (it: Phases) => runsThrough(it, 'extrapolated', knownTo),
+		standstill: (it: Phases) => runsThrough(it, 'standstill', knownTo)
+	};
+	return (['setPastEnd', 'extrapolated', 'standstill'] as const).filter((flag) =>
+		phases.some((it) => marksWorkable(marks[flag](it, knownTo), state, firstStart))
 	);
 }
 
@@ -49,11 +78,11 @@ export function stepHours(
 	site: Site,
 	options: HoursOptions = {}
 ): StepHours {
-	const judgement = judge(step, conditions, site, options);
-	const states = slotStates(judgement, conditions);
+	const judgement = judge(step, conditions, site, errorsOf(conditions, options));
+	const states = slotStates(judgement);
 	const durationSlots = durationSlotsOf(step.durationMinutes);
 	shutShortRuns(states, durationSlots);
-	const { grid } = judgement;
+	const { grid } = judgement.weather;
 	const firstStart =
 		options.from === undefined ? 0 : Math.ceil((options.from - grid.start) / SLOT_SECONDS);
 	return {

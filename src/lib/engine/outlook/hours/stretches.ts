@@ -2,7 +2,7 @@ import { LIMITERS } from '../../vocabulary';
 import { SHUT, type SlotStates } from './judge';
 import type { BestHours, Stretch } from './result';
 import { BROKEN } from './roomSeries';
-import { limiterCode } from './rooms';
+import { limiterCode } from './limit';
 import { windowMinima } from './windows';
 
 const SHORT = limiterCode('short');
@@ -31,7 +31,7 @@ export function stretchesOf(
 	states: SlotStates,
 	durationSlots: number,
 	firstStart: number
-): { stretches: Stretch[]; best: BestHours | null } {
+): { stretches: Stretch[]; best: BestHours | null; startRoom: Float64Array; bindsAt: Int32Array } {
 	const { state, limiter, room } = states;
 	const count = state.length;
 	const rooms = new Float64Array(room);
@@ -69,5 +69,5 @@ export function stretchesOf(
 		}
 		i = to;
 	}
-	return { stretches, best };
+	return { stretches, best, startRoom: leastRoom, bindsAt: leastAt };
 }

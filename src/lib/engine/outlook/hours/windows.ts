@@ -28,7 +28,7 @@ export function windowMinima(
 				unknown++;
 				continue;
 			}
-			while (tail > head && values[queue[tail - 1]] >= value) tail--;
+			while (tail > head && values[queue[tail - 1]] > value) tail--;
 			queue[tail++] = next;
 		}
 		for (; dropped < from; dropped++) {
