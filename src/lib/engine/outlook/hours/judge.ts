@@ -122,18 +122,17 @@ export function slotStates({ weather, apply, phases, masks, silentDrying }: Judg
 	const { count } = weather.grid;
 	const { knownFrom, knownTo } = weather;
 	const least = leastRooms(count);
-	const limiter = new Uint8Array(count);
 	const missingNow = least.unknown;
 	apply.forEach((limit, index) => {
 		takeLeast(limit, index, least);
 	});
-	// An open slot names the limit with the least room too.
-	for (let i = 0; i < count; i++)
-		limiter[i] = least.which[i] < 0 ? NONE : limiterAt(apply[least.which[i]], i);
 	missingNow.fill(1, 0, Math.max(0, knownFrom));
 	missingNow.fill(1, Math.min(count, knownTo));
 	if (silentDrying) missingNow.fill(1);
 
+	// Of the limits that bind: their place in one list, and the slot where they do.
+	const list = [...apply];
+	const bindsAt = new Int32Array(count).fill(-1);
 	const missingLater = new Uint8Array(count);
 	const windowRoom = new Float64Array(count);
 	const windowAt = new Int32Array(count);
@@ -141,9 +140,10 @@ export function slotStates({ weather, apply, phases, masks, silentDrying }: Judg
 		for (let i = 0; i < count; i++) if (wetEnds[i] > knownTo) missingLater[i] = 1;
 		for (const { limits, ends, needs } of ofFace) {
 			const group = leastRooms(count);
-			limits.forEach((limit, index) => {
-				takeLeast(limit, index, group);
-			});
+			for (const limit of limits) {
+				takeLeast(limit, list.length, group);
+				list.push(limit);
+			}
 			if (needs !== null)
 				for (let i = 0; i < count; i++) if (needs[i] !== needs[i]) group.unknown[i] = 1;
 			const nextUnknown = nextMarked(group.unknown);
@@ -151,15 +151,18 @@ export function slotStates({ weather, apply, phases, masks, silentDrying }: Judg
 			windowMinima(group.room, 1, known, windowRoom, windowAt);
 			for (let i = 0; i < count; i++) {
 				if (windowRoom[i] < least.room[i]) {
-					const at = windowAt[i];
 					least.room[i] = windowRoom[i];
-					limiter[i] = limiterAt(limits[group.which[at]], at);
+					least.which[i] = group.which[windowAt[i]];
+					bindsAt[i] = windowAt[i];
 				}
 				if (nextUnknown[i + 1] < known[i]) missingLater[i] = 1;
 			}
 		}
 	}
+	const limiterOf = (i: number): number =>
+		least.which[i] < 0 ? NONE : limiterAt(list[least.which[i]], bindsAt[i] < 0 ? i : bindsAt[i]);
 
+	const limiter = new Uint8Array(count);
 	const state = new Uint8Array(count);
 	const room = new Float32Array(count);
 	const coarse = flagBit('coarse');
@@ -176,6 +179,7 @@ export function slotStates({ weather, apply, phases, masks, silentDrying }: Judg
 			limiter[i] = DARK;
 			room[i] = BROKEN;
 		} else if (value < 0) {
+			limiter[i] = limiterOf(i);
 			room[i] = value;
 		} else if (missingLater[i]) {
 			limiter[i] = NO_DATA;
@@ -183,6 +187,7 @@ export function slotStates({ weather, apply, phases, masks, silentDrying }: Judg
 		} else {
 			const capped = weather.flags[i] & coarse ? Math.min(value, COARSE_ROOM) : value;
 			state[i] = capped < 1 ? TIGHT : OPEN;
+			limiter[i] = limiterOf(i);
 			room[i] = capped;
 		}
 	}

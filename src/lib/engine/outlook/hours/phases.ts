@@ -1,4 +1,4 @@
-import { cureClock, cureProgress, finishSlots, marked, type CureClock } from '../../coating/cure';
+import { cureClock, cureProgress, finishSlots, type CureClock } from '../../coating/cure';
 import { rateTable, type RateTable } from '../../coating/rates';
 import type { TimeName } from '../../coating/times';
 import { WET_STEP_KINDS } from '../../vocabulary';
@@ -190,22 +190,4 @@ export function phaseLimits(
 		setEnds,
 		clocks
 	};
-}
-
-/** 1 per slot after which a clock ran through a mark before its end. */
-export function runsThrough(
-	{ clocks }: Phases,
-	mark: 'extrapolated' | 'standstill',
-	knownTo: number
-): Uint8Array | null {
-	let mask: Uint8Array | null = null;
-	for (const { clock, ends } of clocks) {
-		if (clock[mark] === null) continue;
-		mask ??= new Uint8Array(ends.length);
-		for (let i = 0; i < ends.length; i++) {
-			const end = Math.min(ends[i], ends.length, Math.max(knownTo, i + 1));
-			if (marked(clock[mark], i + 1, end)) mask[i] = 1;
-		}
-	}
-	return mask;
 }

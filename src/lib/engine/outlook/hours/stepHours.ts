@@ -1,7 +1,14 @@
-import { LIMITERS, STATES, type Limiter, type State, type StepFlag } from '../../vocabulary';
+import { marked } from '../../coating/cure';
+import {
+	LIMITERS,
+	STATES,
+	STEP_FLAGS,
+	type Limiter,
+	type State,
+	type StepFlag
+} from '../../vocabulary';
 import { errorSeries, type ErrorSeries } from './errors';
 import { judge, SHUT, slotStates, type Judgement } from './judge';
-import { runsThrough, type Phases } from './phases';
 import type { StepHours } from './result';
 import { shutShortRuns, stretchesOf } from './stretches';
 import type { Site } from '../weather/site';
@@ -37,32 +44,25 @@ export function errorsOf(
 	return conditions.map(() => byLead);
 }
 
-/** Whether a mask marks any workable slot from the first start on. */
-function marksWorkable(mask: Uint8Array | null, state: Uint8Array, firstStart: number): boolean {
-	if (mask === null) return false;
-	for (let i = Math.max(0, firstStart); i < mask.length; i++)
-		if (mask[i] === 1 && state[i] !== SHUT) return true;
-	return false;
-}
-
-/** 1 per slot whose set phase alone runs past the end of the forecast. */
-function setPastEnd({ wetEnds, setEnds }: Phases, knownTo: number): Uint8Array {
-	return Uint8Array.from(setEnds, (end, i) => (end > knownTo && wetEnds[i] <= knownTo ? 1 : 0));
-}
-
+/** What a person must know of the workable slots from the first start on. */
 function stepFlags(
 	{ phases, weather: { knownTo } }: Judgement,
 	state: Uint8Array,
 	firstStart: number
 ): StepFlag[] {
-	const marks = {
-		setPastEnd,
-		extrapolated: (it: Phases) => runsThrough(it, 'extrapolated', knownTo),
-		standstill: (it: Phases) => runsThrough(it, 'standstill', knownTo)
-	};
-	return (['setPastEnd', 'extrapolated', 'standstill'] as const).filter((flag) =>
-		phases.some((it) => marksWorkable(marks[flag](it, knownTo), state, firstStart))
-	);
+	const flags = new Set<StepFlag>();
+	for (const { wetEnds, setEnds, clocks } of phases) {
+		for (let i = Math.max(0, firstStart); i < state.length; i++) {
+			if (state[i] === SHUT) continue;
+			if (setEnds[i] > knownTo && wetEnds[i] <= knownTo) flags.add('setPastEnd');
+			for (const { clock, ends } of clocks) {
+				const end = Math.min(ends[i], state.length, Math.max(knownTo, i + 1));
+				if (marked(clock.extrapolated, i + 1, end)) flags.add('extrapolated');
+				if (marked(clock.standstill, i + 1, end)) flags.add('standstill');
+			}
+		}
+	}
+	return STEP_FLAGS.filter((flag) => flags.has(flag));
 }
 
 /**
