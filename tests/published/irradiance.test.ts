@@ -1,5 +1,6 @@
 import { describe } from 'vitest';
 import {
+	beamShares,
 	clearSkyGlobal,
 	cloudTransmission,
 	extraterrestrialNormal,
@@ -19,16 +20,15 @@ function onPlane({ inputs }: PublishedCase): { beam: number; diffuse: number } {
 	const one = (name: string): Float64Array => Float64Array.of(num(inputs, name));
 	const beam = new Float64Array(1);
 	const diffuse = new Float64Array(1);
+	const sun = {
+		sunAltitude: Float64Array.of(90 - num(inputs, 'zenith')),
+		sunAzimuth: one('solar_azimuth')
+	};
+	const tilt = num(inputs, 'tilt');
 	fillFaceIrradiance(
-		{
-			ghi: one('ghi'),
-			dni: one('dni'),
-			dhi: one('dhi'),
-			sunAltitude: Float64Array.of(90 - num(inputs, 'zenith')),
-			sunAzimuth: one('solar_azimuth')
-		},
-		num(inputs, 'tilt'),
-		num(inputs, 'surface_azimuth'),
+		{ ghi: one('ghi'), dni: one('dni'), dhi: one('dhi') },
+		beamShares(sun, tilt, num(inputs, 'surface_azimuth')),
+		tilt,
 		num(inputs, 'albedo'),
 		beam,
 		diffuse

@@ -90,33 +90,44 @@ export interface LightSeries {
 	readonly sunAzimuth: Float64Array;
 }
 
+/** Share of direct normal light that falls on a plane, per entry; 0 behind it and with the sun down. */
+export function beamShares(
+	{ sunAltitude, sunAzimuth }: Pick<LightSeries, 'sunAltitude' | 'sunAzimuth'>,
+	tilt: number,
+	azimuth: number
+): Float64Array {
+	const cosTilt = Math.cos(tilt * RADIANS);
+	const sinTilt = Math.sin(tilt * RADIANS);
+	const shares = new Float64Array(sunAltitude.length);
+	for (let i = 0; i < shares.length; i++) {
+		const h = sunAltitude[i] * RADIANS;
+		if (!(h > 0)) continue;
+		const cosine =
+			Math.sin(h) * cosTilt + Math.cos(h) * sinTilt * Math.cos((sunAzimuth[i] - azimuth) * RADIANS);
+		if (cosine > 0) shares[i] = cosine;
+	}
+	return shares;
+}
+
 /**
  * Light on a face: direct into `beam`, sky and ground-reflected into `diffuse`, W/m².
  * DNI·max(0, cos θ) and DHI(1 + cos β)/2 + GHI·ρ·g(1 − cos β)/2 (Liu and Jordan 1960).
+ *
+ * @param shares - {@link beamShares} of the face
  */
 export function fillFaceIrradiance(
-	light: LightSeries,
+	light: Pick<LightSeries, 'ghi' | 'dni' | 'dhi'>,
+	shares: Float64Array,
 	tilt: number,
-	azimuth: number,
 	albedo: number,
 	beam: Float64Array,
 	diffuse: Float64Array
 ): void {
-	const cosTilt = Math.cos(tilt * RADIANS);
-	const sinTilt = Math.sin(tilt * RADIANS);
-	const fromSky = (1 + cosTilt) / 2;
-	const fromGround = (albedo * groundView(tilt) * (1 - cosTilt)) / 2;
+	const { ghi, dni, dhi } = light;
+	const fromSky = skyView(tilt);
+	const fromGround = albedo * groundView(tilt) * (1 - fromSky);
 	for (let i = 0; i < beam.length; i++) {
-		diffuse[i] = light.dhi[i] * fromSky + light.ghi[i] * fromGround;
-		const dni = light.dni[i];
-		if (dni === 0) {
-			beam[i] = 0;
-			continue;
-		}
-		const h = light.sunAltitude[i] * RADIANS;
-		const cosine =
-			Math.sin(h) * cosTilt +
-			Math.cos(h) * sinTilt * Math.cos((light.sunAzimuth[i] - azimuth) * RADIANS);
-		beam[i] = cosine > 0 && h > 0 ? dni * cosine : dni * 0;
+		diffuse[i] = dhi[i] * fromSky + ghi[i] * fromGround;
+		beam[i] = dni[i] * shares[i];
 	}
 }

@@ -1,13 +1,19 @@
-import { fillFaceIrradiance, skyView } from '../../met/irradiance';
+import { beamShares, fillFaceIrradiance, skyView } from '../../met/irradiance';
 import { STEFAN_BOLTZMANN } from '../../met/longwave';
 import { MATERIAL_DEFAULTS, RUN_OFF_DEPTH } from '../../met/materials';
-import { runSurface, type SurfaceBody, type SurfaceDrive } from '../../met/surface';
+import {
+	runSurface,
+	type StepsPerSlot,
+	type SurfaceBody,
+	type SurfaceDrive
+} from '../../met/surface';
 import { airAtFace, DEFAULT_ROUGHNESS } from './airAtFace';
-import type { Face, Shelter } from './face';
+import type { Face, Shelter, ShelterFactors } from './face';
 import { flagBit } from '../weather/flags';
 import { shelterFactors } from './shelter';
 import type { Site } from '../weather/site';
 import { SLOT_SECONDS, type FaceConditions, type SlotWeather } from '../weather/slots';
+import type { YardWeather } from '../weather/yardWeather';
 
 const KELVIN = 273.15;
 const DEFAULT_ALBEDO = 0.2;
@@ -29,30 +35,50 @@ function bodyOf(face: Face): SurfaceBody {
 	};
 }
 
+/** The sunlit share of a face under a yard's sun, kept for its members. */
+interface Side {
+	readonly azimuth: number;
+	readonly shares: Float64Array;
+}
+
+/** Light on one side of a face under the open sky. */
+interface SideLight {
+	readonly beam: Float64Array;
+	readonly diffuse: Float64Array;
+}
+
+function lightOn(weather: SlotWeather, site: Site, face: Face, side: Side): SideLight {
+	const beam = new Float64Array(weather.grid.count);
+	const diffuse = new Float64Array(weather.grid.count);
+	const albedo = site.albedo ?? DEFAULT_ALBEDO;
+	fillFaceIrradiance(weather, side.shares, face.tilt, albedo, beam, diffuse);
+	return { beam, diffuse };
+}
+
+const scaled = (values: Float64Array, factor: number): Float64Array =>
+	factor === 1 ? values : values.map((value) => value * factor);
+
 function conditionsOfSide(
 	weather: SlotWeather,
 	site: Site,
 	face: Face,
-	azimuth: number,
-	shelter: Shelter
+	light: SideLight,
+	factors: ShelterFactors,
+	stepsPerSlot: StepsPerSlot
 ): FaceConditions {
-	const factors = shelterFactors(shelter);
 	const air = airAtFace(weather, factors, site.roughness ?? DEFAULT_ROUGHNESS);
 	const { count } = weather.grid;
-	const beam = new Float64Array(count);
-	const shaded = new Float64Array(count);
-	fillFaceIrradiance(weather, face.tilt, azimuth, site.albedo ?? DEFAULT_ALBEDO, beam, shaded);
-	const sunlit = new Float64Array(count);
+	const beam = scaled(light.beam, factors.sun);
+	const shaded = scaled(light.diffuse, factors.sun);
 	const longwave = new Float64Array(count);
 	const skySeen = skyView(face.tilt) * factors.sky;
+	let isSunlit = false;
 	for (let i = 0; i < count; i++) {
-		beam[i] *= factors.sun;
-		shaded[i] *= factors.sun;
-		sunlit[i] = beam[i] + shaded[i];
 		const kelvin = air.airTemperature[i] + KELVIN;
 		// What is not sky is ground or cover, at air temperature.
 		const around = STEFAN_BOLTZMANN * kelvin * kelvin * kelvin * kelvin;
 		longwave[i] = around + skySeen * (weather.skyLongwave[i] - around);
+		if (beam[i] !== 0) isSunlit = true;
 	}
 	const drive: SurfaceDrive = {
 		airTemperature: air.airTemperature,
@@ -70,9 +96,14 @@ function conditionsOfSide(
 	const body = bodyOf(face);
 	const surfaceShaded = new Float64Array(count);
 	const film = new Float64Array(count);
-	const starts = runSurface(drive, shaded, body, surfaceShaded, film);
-	const surfaceSunlit = new Float64Array(count);
-	runSurface(drive, sunlit, body, surfaceSunlit, new Float64Array(count));
+	const starts = runSurface(drive, shaded, body, surfaceShaded, film, stepsPerSlot);
+	let surfaceSunlit = surfaceShaded;
+	if (isSunlit) {
+		surfaceSunlit = new Float64Array(count);
+		const sunlit = new Float64Array(count);
+		for (let i = 0; i < count; i++) sunlit[i] = beam[i] + shaded[i];
+		runSurface(drive, sunlit, body, surfaceSunlit, new Float64Array(count), stepsPerSlot);
+	}
 	const spread = new Float64Array(count);
 	for (let i = 0; i < count; i++) spread[i] = surfaceShaded[i] - air.dewPoint[i];
 
@@ -100,6 +131,13 @@ function conditionsOfSide(
 	};
 }
 
+/** Sides of a face: two where the part has two, the second looking the other way; else one. */
+function sidesOf(weather: SlotWeather, face: Face): Side[] {
+	const azimuths =
+		face.bothSides === true ? [face.azimuth, (face.azimuth + 180) % 360] : [face.azimuth];
+	return azimuths.map((azimuth) => ({ azimuth, shares: beamShares(weather, face.tilt, azimuth) }));
+}
+
 /**
  * What a face meets under a shelter: two runs of the heat balance, shaded and sunlit. Two entries
  * where the part has two sides, the second looking the other way; else one.
@@ -110,7 +148,31 @@ export function faceConditions(
 	face: Face,
 	shelter: Shelter
 ): FaceConditions[] {
-	const sides =
-		face.bothSides === true ? [face.azimuth, (face.azimuth + 180) % 360] : [face.azimuth];
-	return sides.map((azimuth) => conditionsOfSide(weather, site, face, azimuth, shelter));
+	const factors = shelterFactors(shelter);
+	return sidesOf(weather, face).map((side) =>
+		conditionsOfSide(weather, site, face, lightOn(weather, site, face, side), factors, 3)
+	);
+}
+
+/**
+ * {@link faceConditions} in every member of a yard's weather, on steps of a quarter-hour: one list
+ * of sides per member.
+ */
+export function memberConditions(
+	{ weather, members, site }: YardWeather,
+	face: Face,
+	shelter: Shelter
+): FaceConditions[][] {
+	if (members.length === 0) return [];
+	const factors = shelterFactors(shelter);
+	const sides = sidesOf(weather, face).map((side) => ({
+		side,
+		light: lightOn(weather, site, face, side)
+	}));
+	return members.map((member) =>
+		sides.map(({ side, light }) => {
+			const own = member.ghi === weather.ghi ? light : lightOn(member, site, face, side);
+			return conditionsOfSide(member, site, face, own, factors, 1);
+		})
+	);
 }

@@ -65,6 +65,17 @@ function hourlyDewPoint(hourly: Hourly): Float64Array | null {
  * assumed is flagged.
  */
 export function slotWeather(input: SlotWeatherInput): SlotWeather {
+	return weatherUnder(input, null);
+}
+
+/**
+ * As {@link slotWeather}, with the sun and (where `light` says so) the light of a weather already
+ * laid on the same grid: for the members of an ensemble.
+ */
+export function weatherUnder(
+	input: SlotWeatherInput,
+	shared: { readonly weather: SlotWeather; readonly light: boolean } | null
+): SlotWeather {
 	const { site, forecast, looseSand } = input;
 	const { hourly } = forecast;
 	const firstHour = hourly.time[0];
@@ -132,9 +143,17 @@ export function slotWeather(input: SlotWeatherInput): SlotWeather {
 		skyLong[i] = skyLongwave(airTemperature[i], vapour, cloudCover[i]);
 	}
 
-	const sun = sunTrack(site.latitude, site.longitude, grid.start, count, SLOT_SECONDS);
-	const light = slotLight(hourly, periods, grid, sun, cloudCover);
-	for (let i = 0; i < count; i++) if (light.derived[i]) flags[i] |= derived;
+	const sun =
+		shared === null
+			? sunTrack(site.latitude, site.longitude, grid.start, count, SLOT_SECONDS)
+			: { altitude: shared.weather.sunAltitude, azimuth: shared.weather.sunAzimuth };
+	let light: Pick<SlotWeather, 'ghi' | 'dni' | 'dhi'>;
+	if (shared?.light === true) light = shared.weather;
+	else {
+		const laid = slotLight(hourly, periods, grid, sun, cloudCover);
+		for (let i = 0; i < count; i++) if (laid.derived[i]) flags[i] |= derived;
+		light = laid;
+	}
 	const slotOf = (t: number): number => Math.round((t - grid.start) / SLOT_SECONDS);
 
 	const open = {
