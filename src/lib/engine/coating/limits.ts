@@ -1,14 +1,5 @@
 import { z } from 'zod';
-
-const range = (least: number, most: number) =>
-	z
-		.strictObject({
-			min: z.number().min(least).max(most).optional(),
-			max: z.number().min(least).max(most).optional()
-		})
-		.refine((r) => r.min === undefined || r.max === undefined || r.min <= r.max, {
-			error: 'the least is above the most'
-		});
+import { orderedSchema } from './range';
 
 const windLimit = z.strictObject({ max: z.number().min(0).max(60) });
 
@@ -19,9 +10,9 @@ const windLimit = z.strictObject({ max: z.number().min(0).max(60) });
  * Units: °C, % relative humidity, K of spread, m/s at `windHeight` metres (2 when absent).
  */
 export const limitsSchema = z.strictObject({
-	airTemperature: range(-40, 60).optional(),
-	surfaceTemperature: range(-40, 90).optional(),
-	relativeHumidity: range(0, 100).optional(),
+	airTemperature: orderedSchema(-40, 60).optional(),
+	surfaceTemperature: orderedSchema(-40, 90).optional(),
+	relativeHumidity: orderedSchema(0, 100).optional(),
 	/** Surface temperature minus dew point; `untilDry` keeps the least until touch dry. */
 	spread: z
 		.strictObject({ min: z.number().min(0).max(20), untilDry: z.boolean().optional() })

@@ -11,8 +11,17 @@ export const timeTableSchema = z.union([
 	z
 		.array(row)
 		.min(1)
-		.refine((rows) => rows.every((r, i) => i === 0 || r[0] > (rows[i - 1]?.[0] ?? -Infinity)), {
-			error: 'temperatures must rise from row to row'
+		.superRefine((rows, context) => {
+			for (let i = 1; i < rows.length; i++) {
+				const [before, found] = [rows[i - 1][0], rows[i][0]];
+				if (found > before) continue;
+				context.addIssue({
+					code: 'custom',
+					path: [i, 0],
+					message: `temperatures must rise from row to row: row ${i + 1} is at ${found} °C and row ${i} at ${before} °C`,
+					params: { code: 'notRising', found, against: before }
+				});
+			}
 		}),
 	z.number().nonnegative().max(5_256_000),
 	z.null()
