@@ -33,7 +33,7 @@ export const sheets = pgTable(
 	},
 	(table) => [unique().on(table.yardId, table.name, table.version)]
 );
-export type Sheet = typeof sheets.$inferSelect;
+export type SheetRow = typeof sheets.$inferSelect;
 
 /** A queue of steps on one boat. */
 export const jobs = pgTable(
