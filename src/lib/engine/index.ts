@@ -93,3 +93,26 @@ export { WET_HOUR } from './outlook/hours/roomSeries';
 export { stretchesOf } from './outlook/hours/stretches';
 export type { SlotStates } from './outlook/hours/judge';
 export { workWind } from './outlook/hours/applyLimits';
+
+export { HAZARDS, type Hazard } from './coating/hazards';
+export {
+	defaultWind,
+	METHOD_WIND_LIMITS,
+	windStops,
+	type LayingMethod,
+	type WindLimits
+} from './coating/methodWind';
+export { COATING_TYPES, COATINGS, type CoatingType } from './coating/sheet/coatingTypes';
+export {
+	methodLimits,
+	timesBefore,
+	type MethodLimits,
+	type NextCoat,
+	type OvercoatSource
+} from './coating/sheet/forStep';
+export type { MaximumPassed } from './coating/sheet/maximumPassed';
+export { CONTENTS, sheetSchema, type Content, type Sheet } from './coating/sheet/sheet';
+export { SUBSTRATES, type Substrate } from './coating/sheet/substrates';
+export { SAMPLE_SHEETS, type SampleName } from './coating/samples/samples';
+export { taskOf, TASKS, type TaskCode } from './coating/tasks/tasks';
+export type { Task } from './coating/tasks/task';
