@@ -14,8 +14,21 @@ const MOST = 95;
 const STEPS = 32;
 const LAST = (MOST - LEAST) * STEPS;
 
-/** The rates of a table for one end of a window, as {@link logMinutesAt} gives them at the nodes. */
+const remembered = new WeakMap<object, Partial<Record<ClockSide, RateTable>>>();
+
+/**
+ * The rates of a table for one end of a window, as {@link logMinutesAt} gives them at the nodes.
+ * Worked out once for a table with rows.
+ */
 export function rateTable(table: Exclude<TimeTable, null>, side: ClockSide): RateTable {
+	if (typeof table === 'number') return { rates: new Float64Array(LAST + 1).fill(1 / table) };
+	const ofTable = remembered.get(table) ?? {};
+	remembered.set(table, ofTable);
+	ofTable[side] ??= ratesOf(table, side);
+	return ofTable[side];
+}
+
+function ratesOf(table: Exclude<TimeTable, null>, side: ClockSide): RateTable {
 	const curve = timeCurve(table);
 	const rates = new Float64Array(LAST + 1);
 	for (let i = 0; i <= LAST; i++)

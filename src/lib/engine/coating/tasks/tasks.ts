@@ -16,6 +16,8 @@ export const TASKS: readonly (Task & { readonly code: TaskCode })[] = ALL;
 const BY_CODE = new Map<string, Task>(TASKS.map((task) => [task.code, task]));
 
 /** The task of a code; null where there is none of that name. */
+export function taskOf(code: TaskCode): Task;
+export function taskOf(code: string): Task | null;
 export function taskOf(code: string): Task | null {
 	return BY_CODE.get(code) ?? null;
 }

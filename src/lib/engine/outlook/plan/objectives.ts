@@ -20,6 +20,21 @@ export interface PlanBounds {
 	readonly allowed?: readonly (Uint8Array | null)[];
 }
 
+/** Earlier starts from the last step backwards. */
+function backwards(a: RankedWay, b: RankedWay): number {
+	for (let i = a.starts.length - 1; i >= 0; i--)
+		if (a.starts[i] !== b.starts[i]) return a.starts[i] - b.starts[i];
+	return 0;
+}
+
+/** Order of the soonest plan: launch-ready first, then the earlier starts from the last step backwards. */
+export const bySoonest = (a: RankedWay, b: RankedWay): number =>
+	(a.ready === b.ready ? 0 : a.ready - b.ready) || backwards(a, b);
+
+/** Order of the surest plan: most room, then the greatest sum of scores, then the soonest. */
+export const bySurest = (a: RankedWay, b: RankedWay): number =>
+	(a.room === b.room ? 0 : b.room - a.room) || b.score - a.score || bySoonest(a, b);
+
 function ranked(chain: Chain, { starts }: Way): RankedWay {
 	let room = Infinity;
 	let score = 0;

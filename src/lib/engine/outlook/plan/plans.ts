@@ -1,0 +1,99 @@
+import { taskOf } from '../../coating/tasks/tasks';
+import type { Job, JobStep } from '../job/job';
+import type { StepOutlook } from '../job/stepOutlook';
+import type { YardWeather } from '../weather/yardWeather';
+import { abradingBefore, abradingPlaces, placeSets } from './abrading';
+import type { Chain } from './chain';
+import { planOf, type ChainStep } from './describe';
+import { gapsOf } from './gaps';
+import { chosenLaunch, positionOf } from './launch';
+import { launchClosesAfter } from './launchReady';
+import { bySoonest, bySurest, soonest, surest, type RankedWay } from './objectives';
+import type { Plan, Plans } from './plan';
+import { isCoat } from './planStep';
+
+/** Starts that meet a launch at a slot position: not so early that a coat stands ashore too long. */
+function launchAllows(steps: readonly ChainStep[], launch: number): (Uint8Array | null)[] {
+	const last = steps.findLastIndex(({ outlook }) => isCoat(outlook.step.kind));
+	return steps.map(({ outlook: { step, planStep } }, i) => {
+		const { start, finish } = planStep.candidates;
+		if (step.kind === 'launch') return Uint8Array.from(start, (it) => (it <= launch ? 1 : 0));
+		if (i !== last) return null;
+		const closes = launchClosesAfter(step, planStep.faces, finish);
+		return closes === null ? null : Uint8Array.from(closes, (it) => (it >= launch ? 1 : 0));
+	});
+}
+
+interface Found {
+	readonly steps: readonly ChainStep[];
+	readonly way: RankedWay;
+}
+
+type Search = (chain: Chain, steps: readonly ChainStep[]) => RankedWay | null;
+
+/**
+ * The three plans of a job.
+ *
+ * @param outlooks - of the job's own steps
+ * @param judge - judges a step that a plan puts in
+ */
+export function plansOf(
+	yard: YardWeather,
+	job: Job,
+	outlooks: readonly StepOutlook[],
+	judge: (step: JobStep) => StepOutlook
+): Plans {
+	const { grid } = yard.weather;
+	const plain = outlooks.map((outlook, index): ChainStep => ({ index, outlook }));
+	const chains = new Map<string, { steps: readonly ChainStep[]; chain: Chain }>();
+	const chainWith = (places: readonly number[]) => {
+		const key = places.join(' ');
+		const before = chains.get(key);
+		if (before !== undefined) return before;
+		const steps = plain.flatMap((step) => {
+			if (!places.includes(step.index)) return [step];
+			const abrading = judge(abradingBefore(job.steps[step.index], taskOf('drySanding')));
+			return [{ index: -1, outlook: abrading }, step];
+		});
+		const planSteps = steps.map(({ outlook }) => outlook.planStep);
+		const made = {
+			steps,
+			chain: { steps: planSteps.map(({ candidates }) => candidates), gaps: gapsOf(planSteps) }
+		};
+		chains.set(key, made);
+		return made;
+	};
+	const sets = placeSets(abradingPlaces(job.steps));
+	/** The best without abrading put in; failing that with the fewest, the best of those. */
+	const find = (search: Search, order: (a: RankedWay, b: RankedWay) => number): Found | null => {
+		for (const level of [[[]], ...sets]) {
+			const found = level.flatMap((places): Found[] => {
+				const { chain, steps } = chainWith(places);
+				const way = search(chain, steps);
+				return way === null ? [] : [{ steps, way }];
+			});
+			found.sort((a, b) => order(a.way, b.way));
+			if (found.length > 0) return found[0];
+		}
+		return null;
+	};
+	const told = (found: Found | null): Plan | null =>
+		found === null ? null : planOf(yard, found.steps, found.way, job.launch);
+
+	const launch = chosenLaunch(job.launch);
+	const position = launch === null ? null : positionOf(grid, launch);
+	return {
+		soonest: told(find((chain) => soonest(chain), bySoonest)),
+		surest: told(find((chain) => surest(chain), bySurest)),
+		byDate:
+			position === null
+				? null
+				: told(
+						find(
+							(chain, steps) =>
+								surest(chain, { readyBy: position, allowed: launchAllows(steps, position) }),
+							bySurest
+						)
+					)
+	};
+}
