@@ -1,7 +1,8 @@
 import { z } from 'zod';
 import { healthSchema } from './health';
 import { hoursSchema } from './hours';
-import { outlookRequestSchema, outlookResponseSchema } from './outlook';
+import { outlookRequestSchema } from './outlook/request';
+import { outlookResponseSchema } from './outlook/response';
 import { problemSchema } from './problem';
 import { readingSchema } from './reading';
 import { refreshSchema } from './refresh';
@@ -72,8 +73,9 @@ export function openApiDocument(): Json {
 		paths: {
 			'/outlook': {
 				post: {
-					operationId: 'judgeStep',
-					summary: 'Judge one step in a forecast; nothing is stored',
+					operationId: 'judgeChain',
+					summary:
+						'Judge a chain of steps in a forecast and its members, and plan it; nothing is stored',
 					security: [{}, ...SIGNED_IN],
 					requestBody: {
 						required: true,
@@ -82,7 +84,7 @@ export function openApiDocument(): Json {
 						}
 					},
 					responses: {
-						200: answer('The hours of the step', 'Outlook'),
+						200: answer('The hours of each step, the plans, warnings and remedies', 'Outlook'),
 						...problems(400, 413, 415, 429)
 					}
 				}

@@ -93,6 +93,27 @@ export { WET_HOUR } from './outlook/hours/roomSeries';
 export { stretchesOf } from './outlook/hours/stretches';
 export type { SlotStates } from './outlook/hours/judge';
 export { workWind } from './outlook/hours/applyLimits';
+export { instantText } from './outlook/weather/instant';
+export { yardWeather, type YardWeather } from './outlook/weather/yardWeather';
+export { surfaceReadingSchema, withReadings, type SurfaceReading } from './outlook/face/readings';
+export { jobOutlook, type JobOptions, type JobOutlook } from './outlook/job/jobOutlook';
+export { jobRemedies, type RemedyOptions } from './outlook/job/jobRemedies';
+export type { FaceUnder, Job, JobStep } from './outlook/job/job';
+export type { StepOutlook } from './outlook/job/stepOutlook';
+export { WARNING_CODES, type Warning } from './outlook/job/warnings';
+export type { LaunchReady, Plan, PlannedStep, Plans } from './outlook/plan/plan';
+export {
+	chosenLaunch,
+	firstLaunch,
+	launchWishSchema,
+	slipOf,
+	type LaunchWish,
+	type Slip
+} from './outlook/plan/launch';
+export { brokenSteps, type BrokenStep } from './outlook/plan/broken';
+export { placeInWindow, startWindow, type StartWindow } from './outlook/plan/window';
+export { REMEDY_CODES, type Remedy, type RemedyCode } from './outlook/remedies/remedy';
+export type { StepChances } from './outlook/members/chances';
 
 export { HAZARDS, type Hazard } from './coating/hazards';
 export {

@@ -5,7 +5,7 @@ import { DEMO_PEOPLE, DEMO_YARD } from '../../../drizzle/seed/demo';
 import { startForecastFake, type ForecastFake } from '../../../fakes/forecast/server';
 import { healthSchema } from '../../../src/lib/api/health';
 import { hoursSchema } from '../../../src/lib/api/hours';
-import { outlookResponseSchema } from '../../../src/lib/api/outlook';
+import { outlookResponseSchema } from '../../../src/lib/api/outlook/response';
 import { problemSchema } from '../../../src/lib/api/problem';
 import { readingSchema } from '../../../src/lib/api/reading';
 import type { SignedInUser } from '../../../src/lib/server/access/sessions';
@@ -177,6 +177,50 @@ describe('the outlook of a forecast that is sent', () => {
 		for (const series of Object.values(arrays)) expect(series).toHaveLength(time.length);
 		expect(parsed.steps[0].state).toHaveLength(time.length);
 		expect(parsed.steps[0].best?.room).toBeGreaterThan(1);
+		expect(parsed.steps[0].chance).toBeNull();
+	});
+
+	test('the chain is planned three ways, each inside the recoat window of the coat before', async () => {
+		const { plans, remedies } = outlookResponseSchema.parse((await judge(EXAMPLE)).body);
+		for (const plan of [plans.soonest, plans.surest, plans.byDate]) {
+			const [first, second] = plan?.steps ?? [];
+			expect(Date.parse(second.start)).toBeGreaterThanOrEqual(Date.parse(first.earliestNext ?? ''));
+			expect(Date.parse(second.start)).toBeLessThanOrEqual(Date.parse(first.latestNext ?? ''));
+			expect(plan?.holdChance).toBeNull();
+		}
+		expect(plans.byDate?.launch).toBe('2026-05-16T10:30:00.000Z');
+		expect(plans.byDate?.costOfSlip).toBe(0);
+		const rain = remedies.filter(({ limiter }) => limiter === 'rain' || limiter === 'wet');
+		expect(rain.some(({ shelter, gainMinutes }) => shelter === 'tent' && gainMinutes > 0)).toBe(
+			true
+		);
+	});
+
+	test('a logged coat is kept, and members give chances', async () => {
+		const { hourly } = EXAMPLE.forecast;
+		const [coat, next] = EXAMPLE.steps;
+		const logged = {
+			...coat,
+			startAt: '2026-05-04T09:05:00Z',
+			finishedAt: '2026-05-04T11:20:00+00:00'
+		};
+		const wetter = hourly.precipitation.map((_: number, i: number) => (i > 24 && i < 72 ? 1 : 0));
+		const { steps, plans } = outlookResponseSchema.parse(
+			(
+				await judge({
+					...EXAMPLE,
+					steps: [logged, next],
+					forecast: { ...EXAMPLE.forecast, members: [{}, { precipitation: wetter }] }
+				})
+			).body
+		);
+		expect(plans.soonest?.steps[0]).toMatchObject({
+			start: '2026-05-04T09:05:00.000Z',
+			finish: '2026-05-04T11:20:00.000Z',
+			room: null
+		});
+		expect(new Set(steps[1].chance)).toEqual(new Set([0, 0.5, 1]));
+		expect([0, 0.5, 1]).toContain(plans.surest?.holdChance);
 	});
 
 	const hourly = EXAMPLE.forecast.hourly;
@@ -191,8 +235,34 @@ describe('the outlook of a forecast that is sent', () => {
 			'/site/latitude'
 		],
 		['no face', { ...EXAMPLE, face: undefined }, '/face'],
-		['a field of another request', { ...EXAMPLE, launchBy: '2026-05-16' }, '/launchBy'],
-		['two steps', { ...EXAMPLE, steps: [EXAMPLE.steps[0], EXAMPLE.steps[0]] }, '/steps'],
+		['a date for an instant', { ...EXAMPLE, launchBy: '2026-05-16' }, '/launchBy'],
+		['a field of another request', { ...EXAMPLE, yard: 'samphire-hard' }, '/yard'],
+		['no step', { ...EXAMPLE, steps: [] }, '/steps'],
+		[
+			'a step finished before it began',
+			{
+				...EXAMPLE,
+				steps: [
+					{
+						...EXAMPLE.steps[0],
+						startAt: '2026-05-04T09:00:00Z',
+						finishedAt: '2026-05-04T08:00:00Z'
+					}
+				]
+			},
+			'/steps/0/finishedAt'
+		],
+		[
+			'a member with an hour too few',
+			{
+				...EXAMPLE,
+				forecast: {
+					...EXAMPLE.forecast,
+					members: [{ temperature: EXAMPLE.forecast.hourly.temperature.slice(1) }]
+				}
+			},
+			'/forecast/members/0/temperature'
+		],
 		[
 			'a zone that is none',
 			{ ...EXAMPLE, site: { ...EXAMPLE.site, timeZone: 'Mars/Base' } },
@@ -242,7 +312,7 @@ describe('the outlook of a forecast that is sent', () => {
 					}
 				]
 			},
-			'/steps/0/times/touchDry'
+			'/steps/0/times/touchDry/1/0'
 		]
 	];
 	test.each(BAD)('%s is a 400 that points at it', async (_, body, pointer) => {
@@ -263,7 +333,7 @@ describe('the outlook of a forecast that is sent', () => {
 	test('what is no JSON, no JSON type or too large is told as such', async () => {
 		expect((await judge('{"site":')).status).toBe(400);
 		expect((await judge(EXAMPLE, { 'content-type': 'text/plain' })).status).toBe(415);
-		expect((await judge(`"${'x'.repeat(500_000)}"`)).status).toBe(413);
+		expect((await judge(`"${'x'.repeat(6_100_000)}"`)).status).toBe(413);
 	});
 
 	test('the signed-out are told to wait once they ask too often', async () => {

@@ -1,88 +1,144 @@
-import type { OutlookRequest, OutlookResponse } from '../../api/outlook';
+import type { OutlookRequest } from '../../api/outlook/request';
+import type { OutlookResponse } from '../../api/outlook/response';
 import {
-	faceConditions,
 	flagNames,
+	instantText,
+	jobOutlook,
 	LIMITERS,
 	SAND_STATES,
 	SLOT_SECONDS,
-	slotWeather,
 	STATES,
-	stepHours,
-	workWind
+	workWind,
+	yardWeather,
+	type Job,
+	type StepOutlook,
+	type YardWeather
 } from '../../engine';
+import { tellPlan, tellRemedies, tellWarning } from './statelessPlans';
 
-const iso = (seconds: number): string => new Date(seconds * 1000).toISOString();
+/** The slots an answer tells, and their names. */
+interface Span {
+	readonly slots: readonly number[];
+	readonly end: number;
+	readonly at: (slot: number) => string;
+	readonly series: (values: Float64Array | Float32Array) => (number | null)[];
+}
 
-/** A step judged in a forecast that came with the request; nothing is read or stored. */
+function spanOf({ weather: { grid } }: YardWeather, from: number, to: number | undefined): Span {
+	const first = Math.max(0, Math.floor((from - grid.start) / SLOT_SECONDS));
+	const end =
+		to === undefined
+			? grid.count
+			: Math.min(grid.count, Math.ceil((to - grid.start) / SLOT_SECONDS));
+	const slots = Array.from({ length: Math.max(0, end - first) }, (_, i) => first + i);
+	return {
+		slots,
+		end,
+		at: (slot) => instantText(grid.start + slot * SLOT_SECONDS),
+		series: (values) => slots.map((slot) => (Number.isFinite(values[slot]) ? values[slot] : null))
+	};
+}
+
+function tellSlots(
+	{ weather, site }: YardWeather,
+	{ faces, step }: StepOutlook,
+	{ slots, at, series }: Span
+): OutlookResponse['slots'] {
+	const [shown] = faces[0].sides;
+	const wind = workWind(shown, site, step.limits.windHeight);
+	return {
+		time: slots.map(at),
+		airTemperature: series(shown.airTemperature),
+		dewPoint: series(shown.dewPoint),
+		relativeHumidity: series(shown.relativeHumidity),
+		surfaceTemperature: series(shown.surfaceShaded),
+		surfaceTemperatureSun: series(shown.surfaceSunlit),
+		spread: series(shown.spread),
+		film: series(shown.film),
+		windSpeed: series(wind.mean),
+		windGust: series(wind.gust),
+		windSpeed10: series(weather.windSpeed),
+		windGust10: series(weather.windGust),
+		precipitation: series(weather.precipitation),
+		sand: slots.map((slot) => SAND_STATES[weather.sand[slot]] ?? null),
+		flags: slots.map((slot) => flagNames(shown.flags[slot]))
+	};
+}
+
+function tellStep(
+	{ hours, chances }: StepOutlook,
+	{ slots, end, at, series }: Span
+): OutlookResponse['steps'][number] {
+	const chanceOf = (start: number): number | null =>
+		chances === null ? null : chances.starts[start] / chances.members;
+	const { best } = hours;
+	return {
+		state: slots.map((slot) => STATES[hours.state[slot]]),
+		limiter: slots.map((slot) => LIMITERS[hours.limiter[slot]]),
+		room: series(hours.room),
+		chance: chances === null ? null : slots.map((slot) => chances.slots[slot] / chances.members),
+		stretches: hours.stretches
+			.filter((stretch) => stretch.from < end)
+			.map((stretch) => ({
+				from: at(stretch.from),
+				to: at(stretch.to),
+				lastStart: at(stretch.lastStart),
+				bestStart: at(stretch.bestStart),
+				room: stretch.room,
+				chance: chanceOf(stretch.bestStart)
+			})),
+		best:
+			best === null || best.start >= end
+				? null
+				: {
+						start: at(best.start),
+						finish: at(best.finish),
+						room: best.room,
+						limiter: best.limiter,
+						chance: chanceOf(best.start)
+					},
+		flags: [...hours.flags]
+	};
+}
+
+/** The steps of a request as a job on its one face. */
+function jobOf({ steps, face, shelter, readings, ...request }: OutlookRequest): Job {
+	const under = { id: 'face', face, shelter, ...(readings === undefined ? {} : { readings }) };
+	return {
+		steps: steps.map(({ startAt, finishedAt, ...step }) => ({
+			step,
+			faces: [under],
+			...(startAt === undefined ? {} : { startAt }),
+			...(finishedAt === undefined ? {} : { finishedAt })
+		})),
+		launch: {
+			launchBy: request.launchBy,
+			launchSlots: request.launchSlots,
+			dayRate: request.dayRate
+		}
+	};
+}
+
+/** A chain judged in a forecast that came with the request; nothing is read or stored. */
 export function answerOutlook(request: OutlookRequest): OutlookResponse {
-	const { site, forecast, face, shelter, usualErrors } = request;
-	const weather = slotWeather({
+	const { site, forecast, usualErrors, looseSand } = request;
+	const yard = yardWeather({
 		site,
 		forecast,
-		looseSand: request.looseSand ?? null,
+		looseSand: looseSand ?? null,
 		from: request.from,
 		to: request.to
 	});
-	const conditions = faceConditions(weather, site, face, shelter);
-	const { grid } = weather;
 	const from = request.from ?? Math.max(forecast.issuedAt, forecast.hourly.time[0]);
-	const first = Math.max(0, Math.floor((from - grid.start) / SLOT_SECONDS));
-	const end =
-		request.to === undefined
-			? grid.count
-			: Math.min(grid.count, Math.ceil((request.to - grid.start) / SLOT_SECONDS));
-	const slots = Array.from({ length: Math.max(0, end - first) }, (_, i) => first + i);
-	const at = (slot: number): string => iso(grid.start + slot * SLOT_SECONDS);
-	const series = (values: Float64Array | Float32Array): (number | null)[] =>
-		slots.map((slot) => (Number.isFinite(values[slot]) ? values[slot] : null));
-	const [shown] = conditions;
-	const [step] = request.steps;
-	const wind = workWind(shown, site, step.limits.windHeight);
-	const hours = stepHours(step, conditions, site, { usualErrors, from });
+	const job = jobOf(request);
+	const outlook = jobOutlook(yard, job, { from, usualErrors });
+	const span = spanOf(yard, from, request.to);
+	const { soonest, surest, byDate } = outlook.plans;
 	return {
-		slots: {
-			time: slots.map(at),
-			airTemperature: series(shown.airTemperature),
-			dewPoint: series(shown.dewPoint),
-			relativeHumidity: series(shown.relativeHumidity),
-			surfaceTemperature: series(shown.surfaceShaded),
-			surfaceTemperatureSun: series(shown.surfaceSunlit),
-			spread: series(shown.spread),
-			film: series(shown.film),
-			windSpeed: series(wind.mean),
-			windGust: series(wind.gust),
-			windSpeed10: series(weather.windSpeed),
-			windGust10: series(weather.windGust),
-			precipitation: series(weather.precipitation),
-			sand: slots.map((slot) => SAND_STATES[weather.sand[slot]] ?? null),
-			flags: slots.map((slot) => flagNames(shown.flags[slot]))
-		},
-		steps: [
-			{
-				state: slots.map((slot) => STATES[hours.state[slot]]),
-				limiter: slots.map((slot) => LIMITERS[hours.limiter[slot]]),
-				room: series(hours.room),
-				chance: null,
-				stretches: hours.stretches
-					.filter((stretch) => stretch.from < end)
-					.map((stretch) => ({
-						from: at(stretch.from),
-						to: at(stretch.to),
-						lastStart: at(stretch.lastStart),
-						bestStart: at(stretch.bestStart),
-						room: stretch.room
-					})),
-				best:
-					hours.best === null || hours.best.start >= end
-						? null
-						: {
-								start: at(hours.best.start),
-								finish: at(hours.best.finish),
-								room: hours.best.room,
-								limiter: hours.best.limiter
-							},
-				flags: [...hours.flags]
-			}
-		]
+		slots: tellSlots(yard, outlook.steps[0], span),
+		steps: outlook.steps.map((step) => tellStep(step, span)),
+		plans: { soonest: tellPlan(soonest), surest: tellPlan(surest), byDate: tellPlan(byDate) },
+		warnings: outlook.warnings.map(tellWarning),
+		remedies: tellRemedies(yard, outlook, request, from, span.end)
 	};
 }

@@ -9,6 +9,7 @@ import type { FaceUnder } from './job';
 /** What one face meets: in the forecast and in each member, on each of its sides. */
 export interface FaceOutlook {
 	readonly id: string;
+	readonly under: FaceUnder;
 	readonly sides: readonly FaceConditions[];
 	/** Usual errors on each side. */
 	readonly errors: readonly ErrorSeries[];
@@ -30,6 +31,7 @@ export function faceOutlooks(yard: YardWeather, errors: ErrorSeries) {
 		const sides = faceConditions(yard.weather, yard.site, face, shelter).map(measured);
 		const outlook: FaceOutlook = {
 			id: under.id,
+			under,
 			sides,
 			errors: sides.map((_, side) =>
 				faceErrors(

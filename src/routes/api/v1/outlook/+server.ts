@@ -1,12 +1,13 @@
 import { json } from '@sveltejs/kit';
-import { outlookRequestSchema } from '$lib/api/outlook';
+import { outlookRequestSchema } from '$lib/api/outlook/request';
 import { jsonBody } from '$lib/server/http/body';
 import { api, invalid } from '$lib/server/http/problem';
 import { limitSignedOut } from '$lib/server/http/rateLimit';
 import { answerOutlook } from '$lib/server/outlook/stateless';
 import type { RequestHandler } from './$types';
 
-const MOST_BYTES = 400_000;
+/** Sixty members of eighteen days, every variable. */
+const MOST_BYTES = 6_000_000;
 
 export const POST: RequestHandler = api(async ({ locals, request, getClientAddress }) => {
 	if (locals.user === null) await limitSignedOut(getClientAddress());

@@ -1,0 +1,54 @@
+import type { ShelterName } from '../../vocabulary';
+import { faceConditions } from '../face/conditions';
+import { withReadings } from '../face/readings';
+import { positionOf } from '../plan/launch';
+import type { Remedy } from '../remedies/remedy';
+import { remediesOf } from '../remedies/remedies';
+import type { FaceConditions } from '../weather/slots';
+import type { YardWeather } from '../weather/yardWeather';
+import type { JobOutlook } from './jobOutlook';
+import type { StepOutlook } from './stepOutlook';
+
+export interface RemedyOptions {
+	/** Shelters that could be put up, beyond those that stand. */
+	readonly shelters: readonly ShelterName[];
+	/** UTC epoch seconds: runs from here on. */
+	readonly from: number;
+	/** Runs up to this slot; the grid's end where absent. */
+	readonly end?: number;
+}
+
+/** What would open the shut runs of each step of a job that is not fixed, step by step. */
+export function jobRemedies(
+	yard: YardWeather,
+	{ steps }: JobOutlook,
+	{ shelters, from, end }: RemedyOptions
+): (Remedy & { readonly step: number })[] {
+	const { weather, site } = yard;
+	const known = new Map<string, FaceConditions[]>();
+	const under = (outlook: StepOutlook, shelter: ShelterName): FaceConditions[] =>
+		outlook.faces.flatMap(({ under: { face, readings = [] }, id }) => {
+			const key = `${id} ${shelter}`;
+			const conditions =
+				known.get(key) ??
+				faceConditions(weather, site, face, shelter).map((it) => withReadings(it, readings));
+			known.set(key, conditions);
+			return conditions;
+		});
+	return steps.flatMap((outlook, step) => {
+		if (outlook.planStep.isFixed) return [];
+		const stands = outlook.faces.map((face) => face.under.shelter);
+		return remediesOf({
+			step: outlook.step,
+			conditions: outlook.faces.flatMap((face) => face.sides),
+			site,
+			hours: outlook.hours,
+			options: { errors: outlook.faces.flatMap((face) => face.errors), from },
+			shelters: shelters
+				.filter((shelter) => !stands.includes(shelter))
+				.map((shelter) => ({ shelter, conditions: under(outlook, shelter) })),
+			from: Math.max(0, Math.ceil(positionOf(weather.grid, from) - 1e-9)),
+			to: end ?? weather.grid.count
+		}).map((remedy) => ({ ...remedy, step }));
+	});
+}
