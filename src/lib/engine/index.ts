@@ -131,6 +131,15 @@ export {
 	type NextCoat,
 	type OvercoatSource
 } from './coating/sheet/forStep';
+export {
+	checkedSheetSchema,
+	checkSheet,
+	readSheet,
+	type SheetCheck,
+	type SheetReading
+} from './coating/sheet/check/readSheet';
+export type { SheetFinding, SheetProblem, SheetWarning } from './coating/sheet/check/problem';
+export { findingSentence } from './coating/sheet/check/sentence';
 export type { MaximumPassed } from './coating/sheet/maximumPassed';
 export { CONTENTS, sheetSchema, type Content, type Sheet } from './coating/sheet/sheet';
 export { SUBSTRATES, type Substrate } from './coating/sheet/substrates';

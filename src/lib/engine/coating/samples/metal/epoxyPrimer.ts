@@ -42,7 +42,7 @@ export const epoxyPrimer: Sheet = {
 	},
 	times: {
 		potLife: rowsFrom(10, HOUR, 8, 5.5, 4, 3, 2, 1.5),
-		induction: rowsFrom(10, 1, 60, 30, 15, 15, 5),
+		induction: rowsFrom(10, 1, 60, 30, 15, 15, 5, 5),
 		touchDry: rowsFrom(10, HOUR, 8, 5.5, 4, 3, 2, 1.5),
 		keepDry: rowsFrom(10, HOUR, 16, 11, 8, 5.5, 4, 3),
 		dryToSand: rowsFrom(10, HOUR, 40, 28, 20, 14, 10, 7),
