@@ -123,6 +123,12 @@ export {
 	type LayingMethod,
 	type WindLimits
 } from './coating/methodWind';
+export { mixAmounts, type Amounts } from './coating/mix/amounts';
+export { coverage, practicalSpread, thinnedSolids, wetFilmOf } from './coating/mix/coverage';
+export { METHOD_LOSS } from './coating/mix/loss';
+export type { Mixed, MixError } from './coating/mix/mixError';
+export { mixPlan, type MixPlan, type MixRequest } from './coating/mix/mixPlan';
+export { potTime, type PotTime } from './coating/mix/potTime';
 export { COATING_TYPES, COATINGS, type CoatingType } from './coating/sheet/coatingTypes';
 export {
 	methodLimits,
