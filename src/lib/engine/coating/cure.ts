@@ -34,8 +34,12 @@ export function marked(sums: Int32Array | null, from: number, to: number): boole
 	return sums !== null && sums[to] > sums[from];
 }
 
+/** Clocks already run on a temperature: coats of one sheet on one face ask alike. */
+const remembered = new WeakMap<Float64Array, Map<TimeTable, Map<string, CureClock>>>();
+
 /**
- * The clock of a table over surface temperatures (°C per slot, NaN unknown).
+ * The clock of a table over surface temperatures (°C per slot, NaN unknown), run once for the same
+ * table and array.
  *
  * @param curingMin - °C under which earliest clocks stand still; −Infinity for none
  */
@@ -44,6 +48,24 @@ export function cureClock(
 	surfaceTemperature: Float64Array,
 	side: ClockSide,
 	curingMin = -Infinity
+): CureClock {
+	const least = side === 'earliest' ? curingMin : -Infinity;
+	const ofTemperature =
+		remembered.get(surfaceTemperature) ?? new Map<TimeTable, Map<string, CureClock>>();
+	remembered.set(surfaceTemperature, ofTemperature);
+	const ofTable = ofTemperature.get(table) ?? new Map<string, CureClock>();
+	ofTemperature.set(table, ofTable);
+	const key = `${side} ${least}`;
+	const clock = ofTable.get(key) ?? runClock(table, surfaceTemperature, side, least);
+	ofTable.set(key, clock);
+	return clock;
+}
+
+function runClock(
+	table: Exclude<TimeTable, null>,
+	surfaceTemperature: Float64Array,
+	side: ClockSide,
+	least: number
 ): CureClock {
 	const count = surfaceTemperature.length;
 	const curve = timeCurve(table);
@@ -54,8 +76,7 @@ export function cureClock(
 	let extrapolated: Uint8Array | null = null;
 	let standstill: Uint8Array | null = null;
 	// A constant time on no curing minimum asks for no temperature.
-	const needed = constantRate === null || curingMin > -Infinity;
-	const least = side === 'earliest' ? curingMin : -Infinity;
+	const needed = constantRate === null || least > -Infinity;
 	for (let i = 0; i < count; i++) {
 		const temperature = surfaceTemperature[i];
 		let rate = 0;

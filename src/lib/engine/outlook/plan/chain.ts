@@ -30,6 +30,8 @@ export interface Gap {
 	readonly to: number;
 	readonly earliest: Float64Array;
 	readonly latest: Float64Array;
+	/** The maximum of a recoat window: what abrading in between would clear. */
+	readonly isMaximum?: boolean;
 }
 
 /** Rounding of exact positions, in slots: under a millisecond. */

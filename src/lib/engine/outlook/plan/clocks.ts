@@ -37,10 +37,7 @@ function meanCycle(progress: Float64Array, unknown: Int32Array | null): Float64A
 	return cycle;
 }
 
-/** Clocks already run on a temperature: coats of one sheet on one face ask alike. */
-const remembered = new WeakMap<Float64Array, Map<TimeTable, Map<string, FaceClock>>>();
-
-/** The clock of a table on a face's temperature, run once. */
+/** The clock of a table on a face's temperature. */
 function faceClock(
 	table: Exclude<TimeTable, null>,
 	face: FaceConditions,
@@ -48,25 +45,10 @@ function faceClock(
 	side: ClockSide,
 	curingMin: number
 ): FaceClock {
-	const ofTemperature = remembered.get(temperature) ?? new Map<TimeTable, Map<string, FaceClock>>();
-	remembered.set(temperature, ofTemperature);
-	const ofTable = ofTemperature.get(table) ?? new Map<string, FaceClock>();
-	ofTemperature.set(table, ofTable);
-	const key = `${side} ${curingMin}`;
-	const clock = ofTable.get(key) ?? runClock(table, face, temperature, side, curingMin);
-	ofTable.set(key, clock);
-	return clock;
-}
-
-function runClock(
-	table: Exclude<TimeTable, null>,
-	face: FaceConditions,
-	temperature: Float64Array,
-	side: ClockSide,
-	curingMin: number
-): FaceClock {
 	const end = Math.min(face.weather.knownTo, temperature.length);
-	const { progress, unknown } = cureClock(table, temperature.subarray(0, end), side, curingMin);
+	const clock = cureClock(table, temperature, side, curingMin);
+	const progress = clock.progress.subarray(0, end + 1);
+	const unknown = clock.unknown !== null && clock.unknown[end] > 0 ? clock.unknown : null;
 	let nextUnknown: Int32Array | null = null;
 	if (unknown !== null) {
 		nextUnknown = new Int32Array(end + 1).fill(end);

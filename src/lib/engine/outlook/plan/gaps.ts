@@ -36,8 +36,49 @@ export function gapsOf(steps: readonly PlanStep[]): Gap[] {
 			from: link.from,
 			to: link.to,
 			earliest: link.side === 'earliest' ? bounds : everywhere(from.candidates, -Infinity),
-			latest: link.side === 'latest' ? bounds : everywhere(from.candidates, Infinity)
+			latest: link.side === 'latest' ? bounds : everywhere(from.candidates, Infinity),
+			isMaximum: link.isMaximum
 		};
 	});
-	return [...inOrder, ...byClock];
+	const gaps = merged([...inOrder, ...byClock]);
+	return gaps.filter((gap) => !isImplied(gap, gaps, steps));
+}
+
+/** Gaps between the same two steps as one, maxima apart: they may be let go. */
+function merged(gaps: readonly Gap[]): Gap[] {
+	const byPair = new Map<string, Gap>();
+	for (const gap of gaps) {
+		const key = `${gap.from} ${gap.to} ${gap.isMaximum === true ? 'maximum' : ''}`;
+		const before = byPair.get(key);
+		byPair.set(key, before === undefined ? gap : tighter(before, gap));
+	}
+	return [...byPair.values()];
+}
+
+function tighter(a: Gap, b: Gap): Gap {
+	const earliest = a.earliest.slice();
+	const latest = a.latest.slice();
+	for (let k = 0; k < earliest.length; k++) {
+		if (b.earliest[k] > earliest[k]) earliest[k] = b.earliest[k];
+		if (b.latest[k] < latest[k]) latest[k] = b.latest[k];
+	}
+	return { ...a, earliest, latest };
+}
+
+/**
+ * Whether a gap over a step only repeats what that step asks itself: after the wait before it and
+ * its own work, a wait from further back is over. Chains without such gaps are swept faster.
+ */
+function isImplied(gap: Gap, gaps: readonly Gap[], steps: readonly PlanStep[]): boolean {
+	const { from, to, earliest, latest } = gap;
+	if (to - from < 2 || latest.some((it) => it < Infinity)) return false;
+	const between = steps.slice(from + 1, to);
+	if (between.some((it) => it.isFixed)) return false;
+	const work = between.reduce((sum, it) => sum + Math.ceil(it.duration), 0);
+	return gaps.some(
+		(first) =>
+			first.from === from &&
+			first.to === from + 1 &&
+			first.earliest.every((it, k) => it + work >= earliest[k])
+	);
 }

@@ -17,6 +17,8 @@ export interface Link {
 	/** `earliest`: not before the clock is done; `latest`: not after. */
 	readonly side: 'earliest' | 'latest';
 	readonly table: Exclude<TimeTable, null>;
+	/** The maximum of a recoat window, which abrading in between would clear. */
+	readonly isMaximum: boolean;
 }
 
 /** The table by which the next coat waits: overcoat min, else touch dry; undefined where silent. */
@@ -47,9 +49,14 @@ function lastBefore(
 /** What the steps before one ask of it on one face. */
 function linksOnFace(steps: readonly PlanStep[], to: number, id: string): Link[] {
 	const links: Link[] = [];
-	const ask = (from: number, side: Link['side'], table: TimeTable | undefined): void => {
+	const ask = (
+		from: number,
+		side: Link['side'],
+		table: TimeTable | undefined,
+		isMaximum = false
+	): void => {
 		if (table === undefined || table === null) return;
-		links.push({ from, to, face: indexOfFace(steps[from], id), side, table });
+		links.push({ from, to, face: indexOfFace(steps[from], id), side, table, isMaximum });
 	};
 	const { kind } = steps[to].step;
 	const coat = lastBefore(steps, to, id, (it) => isCoat(it.step.kind));
@@ -58,7 +65,7 @@ function linksOnFace(steps: readonly PlanStep[], to: number, id: string): Link[]
 	const cleared = lastBefore(steps, to, id, (it) => clearsMaximum(it.step.kind));
 	if (coat >= 0) {
 		ask(coat, 'earliest', overcoatTable(steps[coat]));
-		if (cleared < coat) ask(coat, 'latest', steps[coat].step.times.overcoatMax);
+		if (cleared < coat) ask(coat, 'latest', steps[coat].step.times.overcoatMax, true);
 	}
 	for (let from = Math.max(coat + 1, cleared, 0); from < to; from++) {
 		if (indexOfFace(steps[from], id) < 0 || isCoat(steps[from].step.kind)) continue;
@@ -76,10 +83,10 @@ function launchLinks(steps: readonly PlanStep[], to: number): Link[] {
 		return earlier.faces.flatMap((_, face) => [
 			...(ready === undefined || ready === null
 				? []
-				: [{ from, to, face, side: 'earliest', table: ready } as const]),
+				: [{ from, to, face, side: 'earliest', table: ready, isMaximum: false } as const]),
 			...(closes === undefined || closes === null
 				? []
-				: [{ from, to, face, side: 'latest', table: closes } as const])
+				: [{ from, to, face, side: 'latest', table: closes, isMaximum: false } as const])
 		]);
 	});
 }

@@ -48,12 +48,14 @@ function ranked(chain: Chain, { starts }: Way): RankedWay {
 }
 
 /** Masks of the starts with at least so much room, ready by a position, and allowed. */
-function masks(chain: Chain, room: number, readyBy: number, bounds: PlanBounds): Uint8Array[] {
-	return chain.steps.map((step, i) => {
+function masks(chain: Chain, least: number, readyBy: number, bounds: PlanBounds): Uint8Array[] {
+	return chain.steps.map(({ room, ready }, i) => {
 		const allowed = bounds.allowed?.[i] ?? null;
-		return Uint8Array.from(step.room, (value, k) =>
-			value >= room && step.ready[k] <= readyBy && (allowed === null || allowed[k] === 1) ? 1 : 0
-		);
+		const mask = new Uint8Array(room.length);
+		for (let k = 0; k < mask.length; k++)
+			if (room[k] >= least && ready[k] <= readyBy && (allowed === null || allowed[k] === 1))
+				mask[k] = 1;
+		return mask;
 	});
 }
 

@@ -29,6 +29,12 @@ interface Found {
 	readonly way: RankedWay;
 }
 
+/** Whether a chain has a way once the maxima before some coats are let go: what abrading can win at most. */
+function mayHelp({ steps, gaps }: Chain, places: readonly number[]): boolean {
+	const loose = gaps.filter(({ to, isMaximum }) => isMaximum !== true || !places.includes(to));
+	return soonest({ steps, gaps: loose }) !== null;
+}
+
 type Search = (chain: Chain, steps: readonly ChainStep[]) => RankedWay | null;
 
 /**
@@ -63,11 +69,13 @@ export function plansOf(
 		chains.set(key, made);
 		return made;
 	};
+	const plainChain = chainWith([]).chain;
 	const sets = placeSets(abradingPlaces(job.steps));
 	/** The best without abrading put in; failing that with the fewest, the best of those. */
 	const find = (search: Search, order: (a: RankedWay, b: RankedWay) => number): Found | null => {
 		for (const level of [[[]], ...sets]) {
 			const found = level.flatMap((places): Found[] => {
+				if (places.length > 0 && !mayHelp(plainChain, places)) return [];
 				const { chain, steps } = chainWith(places);
 				const way = search(chain, steps);
 				return way === null ? [] : [{ steps, way }];

@@ -41,13 +41,15 @@ interface Layer {
 function joined(gaps: readonly Gap[], from: number, to: number): Gap | null {
 	const here = gaps.filter((gap) => gap.from === from && gap.to === to);
 	if (here.length <= 1) return here[0] ?? null;
-	const [first] = here;
-	return {
-		from,
-		to,
-		earliest: first.earliest.map((_, k) => Math.max(...here.map((gap) => gap.earliest[k]))),
-		latest: first.latest.map((_, k) => Math.min(...here.map((gap) => gap.latest[k])))
-	};
+	const earliest = here[0].earliest.slice();
+	const latest = here[0].latest.slice();
+	for (const gap of here.slice(1)) {
+		for (let k = 0; k < earliest.length; k++) {
+			if (gap.earliest[k] > earliest[k]) earliest[k] = gap.earliest[k];
+			if (gap.latest[k] < latest[k]) latest[k] = gap.latest[k];
+		}
+	}
+	return { from, to, earliest, latest };
 }
 
 const reachesOver = (gaps: readonly Gap[], step: number): boolean =>
@@ -56,11 +58,15 @@ const reachesOver = (gaps: readonly Gap[], step: number): boolean =>
 function firstLayer(chain: Chain, objective: Objective): Layer {
 	const count = chain.steps[0].start.length;
 	const allowed = objective.allowed[0];
+	const start = new Int32Array(count);
+	const value = new Float64Array(count);
+	for (let k = 0; k < count; k++) {
+		start[k] = k;
+		value[k] = allowed === null || allowed[k] === 1 ? objective.values[0][k] : -Infinity;
+	}
 	return {
-		start: Int32Array.from({ length: count }, (_, k) => k),
-		value: objective.values[0].map((value, k) =>
-			allowed === null || allowed[k] === 1 ? value : -Infinity
-		),
+		start,
+		value,
 		parent: new Int32Array(count).fill(-1),
 		targets: [1],
 		bounds: null
@@ -104,6 +110,8 @@ function combined({ combine }: Objective, before: number, here: number): number 
 	return combine === 'sum' ? before + here : Math.min(before, here);
 }
 
+const NO_BOUNDS = new Float64Array(0);
+
 /** A way in, while a layer with open bounds is made. */
 interface WayIn {
 	readonly start: number;
@@ -143,31 +151,43 @@ function scan(chain: Chain, objective: Objective, step: number, before: Layer): 
 	// What the step before asks of later ones, where its layer carries no bounds yet.
 	const past = targets.map((t) => joined(chain.gaps, step - 1, t));
 	const result: WayIn[] = [];
+	const earlier = chain.steps[step - 1].start;
 	for (let k = 0; k < start.length; k++) {
 		if (allowed !== null && allowed[k] === 0) continue;
 		const ways: WayIn[] = [];
 		for (let way = 0; way < before.value.length; way++) {
 			if (before.value[way] === -Infinity) continue;
 			const from = before.bounds === null ? way : before.start[way];
+			// Work in order: nothing that starts later comes before.
+			if (into !== null && earlier[from] > start[k] + POSITION_ROUNDING) break;
 			const bounds = before.bounds?.[way];
 			const opens = bounds === undefined ? (into?.earliest[from] ?? -Infinity) : bounds[2 * here];
 			const closes = bounds === undefined ? (into?.latest[from] ?? Infinity) : bounds[2 * here + 1];
 			if (!within(start[k], opens, closes)) continue;
-			const open = new Float64Array(2 * targets.length);
-			targets.forEach((_, t) => {
-				const at = carried[t];
-				const since =
-					bounds === undefined
-						? [past[t]?.earliest[from] ?? -Infinity, past[t]?.latest[from] ?? Infinity]
-						: at < 0
-							? [-Infinity, Infinity]
-							: [bounds[2 * at], bounds[2 * at + 1]];
-				// A bound that the work itself outlasts is no tighter than the work.
-				open[2 * t] = Math.max(since[0], own[t]?.earliest[k] ?? -Infinity, finish[k]);
-				open[2 * t + 1] = Math.min(since[1], own[t]?.latest[k] ?? Infinity);
-			});
 			const value = combined(objective, before.value[way], objective.values[step][k]);
-			keep(ways, { start: k, value, parent: way, bounds: isOpen ? open : new Float64Array(0) });
+			if (!isOpen) {
+				// Nothing stays open: the best way in, the first of equal ones.
+				if (ways.length === 0 || value > ways[0].value)
+					ways[0] = { start: k, value, parent: way, bounds: NO_BOUNDS };
+				continue;
+			}
+			const open = new Float64Array(2 * targets.length);
+			for (let t = 0; t < targets.length; t++) {
+				const at = carried[t];
+				let since = -Infinity;
+				let until = Infinity;
+				if (bounds === undefined) {
+					since = past[t]?.earliest[from] ?? -Infinity;
+					until = past[t]?.latest[from] ?? Infinity;
+				} else if (at >= 0) {
+					since = bounds[2 * at];
+					until = bounds[2 * at + 1];
+				}
+				// A bound that the work itself outlasts is no tighter than the work.
+				open[2 * t] = Math.max(since, own[t]?.earliest[k] ?? -Infinity, finish[k]);
+				open[2 * t + 1] = Math.min(until, own[t]?.latest[k] ?? Infinity);
+			}
+			keep(ways, { start: k, value, parent: way, bounds: open });
 		}
 		result.push(...ways);
 	}
