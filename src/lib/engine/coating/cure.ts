@@ -125,7 +125,7 @@ export function cureProgress(
 }
 
 /** Rounding of a sum of many slots; a clock this near to done is done. */
-const DONE = 1 - 1e-9;
+export const DONE = 1 - 1e-9;
 
 /**
  * For every slot, the first slot whose start lies at or after the finish of a coat laid by that

@@ -4,6 +4,7 @@ import {
 	saturationPressureOverWater,
 	vapourDensity
 } from '../../met/humidity';
+import { STEFAN_BOLTZMANN } from '../../met/longwave';
 import { convection, vapourTransfer } from '../../met/surface';
 import { logProfileFactor } from '../../met/wind';
 import type { ShelterFactors } from './face';
@@ -12,6 +13,7 @@ import { SLOT_SECONDS, type SlotWeather } from '../weather/slots';
 /** Ground roughness of a yard that states none, m (default, no source). */
 export const DEFAULT_ROUGHNESS = 0.03;
 const FACE_HEIGHT = 2;
+const KELVIN = 273.15;
 const SLOTS_PER_DAY = (24 * 3600) / SLOT_SECONDS;
 
 /** The air a face meets under a shelter, whatever way it looks. Shared by faces. */
@@ -30,6 +32,9 @@ export interface AirAtFace {
 	readonly dayMean: Float64Array;
 	/** mm per slot that reaches the face */
 	readonly rain: Float64Array;
+	/** W/m² of long wave from what is at air temperature, and what the open sky sends beyond that. */
+	readonly surroundings: Float64Array;
+	readonly skyExcess: Float64Array;
 }
 
 /** Mean over the 24 h before each slot; in the first day that day's mean. Unknown slots are passed over. */
@@ -84,7 +89,9 @@ export function airAtFace(
 		heatTransfer: new Float64Array(count),
 		vapourTransfer: new Float64Array(count),
 		dayMean: new Float64Array(count),
-		rain: factors.rain ? new Float64Array(count) : weather.precipitation
+		rain: factors.rain ? new Float64Array(count) : weather.precipitation,
+		surroundings: new Float64Array(count),
+		skyExcess: new Float64Array(count)
 	};
 	const windScale = logProfileFactor(roughness, FACE_HEIGHT) * factors.wind;
 	const sunHeat = factors.sunHeat ?? 0;
@@ -104,6 +111,10 @@ export function airAtFace(
 			: weather.relativeHumidity[i];
 		air.vapourDensity[i] = vapourDensity(vapour, temperature);
 		air.condensationPoint[i] = dewPoint < 0 ? frostPointFromVapourPressure(vapour) : dewPoint;
+		const kelvin = temperature + KELVIN;
+		const around = STEFAN_BOLTZMANN * kelvin * kelvin * kelvin * kelvin;
+		air.surroundings[i] = around;
+		air.skyExcess[i] = weather.skyLongwave[i] - around;
 		const h = convection(weather.windSpeed[i] * windScale);
 		air.heatTransfer[i] = h;
 		air.vapourTransfer[i] = vapourTransfer(h, temperature, weather.pressure[i]);

@@ -1,5 +1,4 @@
 import { beamShares, fillFaceIrradiance, skyView } from '../../met/irradiance';
-import { STEFAN_BOLTZMANN } from '../../met/longwave';
 import { MATERIAL_DEFAULTS, RUN_OFF_DEPTH } from '../../met/materials';
 import {
 	runSurface,
@@ -15,7 +14,6 @@ import type { Site } from '../weather/site';
 import { SLOT_SECONDS, type FaceConditions, type SlotWeather } from '../weather/slots';
 import type { YardWeather } from '../weather/yardWeather';
 
-const KELVIN = 273.15;
 const DEFAULT_ALBEDO = 0.2;
 /** History that makes a start trustworthy, and how long a start without it is flagged. */
 const HISTORY_SLOTS = (24 * 3600) / SLOT_SECONDS;
@@ -55,6 +53,21 @@ function lightOn(weather: SlotWeather, site: Site, face: Face, side: Side): Side
 	return { beam, diffuse };
 }
 
+/** Arrays that a run fills and nobody keeps; thousands of members would leave megabytes of them. */
+const scratch = new Map<number, Record<'longwave' | 'sunlit' | 'unseenFilm', Float64Array>>();
+
+function scratchOf(count: number) {
+	const made = scratch.get(count) ?? {
+		longwave: new Float64Array(count),
+		sunlit: new Float64Array(count),
+		unseenFilm: new Float64Array(count)
+	};
+	// Grids of one process are of few lengths; keep the last.
+	if (!scratch.has(count)) scratch.clear();
+	scratch.set(count, made);
+	return made;
+}
+
 const scaled = (values: Float64Array, factor: number): Float64Array =>
 	factor === 1 ? values : values.map((value) => value * factor);
 
@@ -70,14 +83,13 @@ function conditionsOfSide(
 	const { count } = weather.grid;
 	const beam = scaled(light.beam, factors.sun);
 	const shaded = scaled(light.diffuse, factors.sun);
-	const longwave = new Float64Array(count);
+	const { longwave, sunlit, unseenFilm } = scratchOf(count);
 	const skySeen = skyView(face.tilt) * factors.sky;
 	let isSunlit = false;
 	for (let i = 0; i < count; i++) {
-		const kelvin = air.airTemperature[i] + KELVIN;
 		// What is not sky is ground or cover, at air temperature.
-		const around = STEFAN_BOLTZMANN * kelvin * kelvin * kelvin * kelvin;
-		longwave[i] = around + skySeen * (weather.skyLongwave[i] - around);
+		longwave[i] = air.surroundings[i] + skySeen * air.skyExcess[i];
+		sunlit[i] = beam[i] + shaded[i];
 		if (beam[i] !== 0) isSunlit = true;
 	}
 	const drive: SurfaceDrive = {
@@ -100,9 +112,7 @@ function conditionsOfSide(
 	let surfaceSunlit = surfaceShaded;
 	if (isSunlit) {
 		surfaceSunlit = new Float64Array(count);
-		const sunlit = new Float64Array(count);
-		for (let i = 0; i < count; i++) sunlit[i] = beam[i] + shaded[i];
-		runSurface(drive, sunlit, body, surfaceSunlit, new Float64Array(count), stepsPerSlot);
+		runSurface(drive, sunlit, body, surfaceSunlit, unseenFilm, stepsPerSlot);
 	}
 	const spread = new Float64Array(count);
 	for (let i = 0; i < count; i++) spread[i] = surfaceShaded[i] - air.dewPoint[i];

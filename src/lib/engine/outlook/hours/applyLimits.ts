@@ -3,8 +3,9 @@ import { DEFAULT_ROUGHNESS } from '../face/airAtFace';
 import type { Site } from '../weather/site';
 import type { FaceConditions } from '../weather/slots';
 import type { ErrorSeries } from './errors';
-import { limiterCode, type Limit } from './limit';
-import { DIRECT_SUN, directSunRoom, filmRoom, rainRoom, trendRoom } from './roomSeries';
+import { limitOn, type Limit } from './limit';
+import { DIRECT_SUN, directSunRoom, rainRoom, trendRoom } from './roomSeries';
+import { filmLimit, rainLimit, sandCounts, sandLimit, spreadLimit } from './sharedLimits';
 import type { Step } from './step';
 
 /** Height at which a method's wind limit is judged, m. */
@@ -41,148 +42,120 @@ export function workWind(face: FaceConditions, site: Site, height: number = WORK
 	return wind;
 }
 
-type Told = Pick<Limit, 'limit' | 'side' | 'unit' | 'value'> & Partial<Limit>;
+const APPLY = 'apply' as const;
 
-/** What must hold in the slot itself: the limits of the apply phase on one face. */
-export function applyLimits(
+/** The limits of the apply phase that ask the air alone, whatever way the face looks. */
+export function airLimits(
 	step: Step,
 	face: FaceConditions,
 	faceIndex: number,
 	site: Site,
 	errors: ErrorSeries
 ): Limit[] {
-	const { limits } = step;
+	const { airTemperature, relativeHumidity, wind, gust, windHeight, rainFree } = step.limits;
 	const list: Limit[] = [];
-	const add = (limiter: Parameters<typeof limiterCode>[0], told: Told): void => {
-		list.push({
-			phase: 'apply',
-			limiter: limiterCode(limiter),
-			bound: null,
-			error: null,
-			rooms: null,
-			freezes: null,
-			modelled: false,
-			face,
-			faceIndex,
-			...told
+	const air = (side: Limit['side'], bound: number): Limit =>
+		limitOn(face, faceIndex, side === 'least' ? 'cold' : 'hot', {
+			limit: 'airTemperature',
+			phase: APPLY,
+			side,
+			unit: 'celsius',
+			value: face.airTemperature,
+			bound,
+			error: errors.airTemperature
 		});
-	};
-
-	const air = limits.airTemperature;
-	const ofAir = {
-		limit: 'airTemperature',
-		unit: 'celsius',
-		value: face.airTemperature,
-		error: errors.airTemperature
-	} as const;
-	if (air?.min !== undefined) add('cold', { ...ofAir, side: 'least', bound: air.min });
-	if (air?.max !== undefined) add('hot', { ...ofAir, side: 'most', bound: air.max });
-
-	// The coldest and the warmest spot must both be inside.
-	const surface = limits.surfaceTemperature;
-	const ofSurface = {
-		limit: 'surfaceTemperature',
-		unit: 'celsius',
-		error: errors.surfaceTemperature,
-		modelled: true
-	} as const;
-	if (surface?.min !== undefined)
-		add('cold', { ...ofSurface, value: face.surfaceShaded, side: 'least', bound: surface.min });
-	if (surface?.max !== undefined)
-		add('hot', { ...ofSurface, value: face.surfaceSunlit, side: 'most', bound: surface.max });
-
-	const humidity = limits.relativeHumidity;
-	const ofHumidity = {
-		limit: 'relativeHumidity',
-		unit: 'percent',
-		value: face.relativeHumidity,
-		error: errors.relativeHumidity
-	} as const;
-	if (humidity?.max !== undefined)
-		add('damp', { ...ofHumidity, side: 'most', bound: humidity.max });
-	if (humidity?.min !== undefined)
-		add('dry', { ...ofHumidity, side: 'least', bound: humidity.min });
-
-	if (limits.spread !== undefined) {
-		add('dew', {
-			limit: 'spread',
-			side: 'least',
-			unit: 'kelvin',
-			value: face.spread,
-			bound: limits.spread.min,
-			error: errors.spread,
-			modelled: true
+	if (airTemperature?.min !== undefined) list.push(air('least', airTemperature.min));
+	if (airTemperature?.max !== undefined) list.push(air('most', airTemperature.max));
+	const humidity = (side: Limit['side'], bound: number): Limit =>
+		limitOn(face, faceIndex, side === 'least' ? 'dry' : 'damp', {
+			limit: 'relativeHumidity',
+			phase: APPLY,
+			side,
+			unit: 'percent',
+			value: face.relativeHumidity,
+			bound,
+			error: errors.relativeHumidity
 		});
-	}
-	if (limits.wind !== undefined || limits.gust !== undefined) {
-		const wind = workWind(face, site, limits.windHeight);
-		const ofWind = { side: 'most', unit: 'metresPerSecond' } as const;
-		if (limits.wind !== undefined)
-			add('wind', {
-				...ofWind,
-				limit: 'wind',
-				value: wind.mean,
-				bound: limits.wind.max,
-				error: errors.wind
+	if (relativeHumidity?.max !== undefined) list.push(humidity('most', relativeHumidity.max));
+	if (relativeHumidity?.min !== undefined) list.push(humidity('least', relativeHumidity.min));
+	if (wind !== undefined || gust !== undefined) {
+		const there = workWind(face, site, windHeight);
+		const windy = (limit: 'wind' | 'gust', value: Float64Array, bound: number): Limit =>
+			limitOn(face, faceIndex, 'wind', {
+				limit,
+				phase: APPLY,
+				side: 'most',
+				unit: 'metresPerSecond',
+				value,
+				bound,
+				error: errors[limit]
 			});
-		if (limits.gust !== undefined)
-			add('wind', {
-				...ofWind,
-				limit: 'gust',
-				value: wind.gust,
-				bound: limits.gust.max,
-				error: errors.gust
-			});
+		if (wind !== undefined) list.push(windy('wind', there.mean, wind.max));
+		if (gust !== undefined) list.push(windy('gust', there.gust, gust.max));
 	}
-	if (limits.rainFree === true && face.rainReaches)
-		add('rain', { limit: 'rain', side: 'most', unit: 'millimetres', ...rainRoom(face.weather) });
-	if (limits.drySurface === true)
-		add('wet', {
-			limit: 'film',
-			side: 'most',
-			unit: 'millimetres',
-			...filmRoom(face.film),
-			freezes: face.surfaceShaded,
-			modelled: true
-		});
-	if (limits.noDirectSun === true)
-		add('sun', {
-			limit: 'directSun',
-			side: 'most',
-			unit: 'wattsPerSquareMetre',
-			...directSunRoom(face.beam),
-			bound: DIRECT_SUN,
-			modelled: true
-		});
-	if (limits.surfaceTrend !== undefined) {
-		const falling = limits.surfaceTrend === 'falling';
-		add(falling ? 'rising' : 'falling', {
-			limit: 'surfaceTrend',
-			side: falling ? 'most' : 'least',
-			unit: 'kelvin',
-			...trendRoom(face.surfaceShaded, limits.surfaceTrend),
-			bound: 0,
-			modelled: true
-		});
-	}
-	if (sandCounts(step, face)) add('sand', sandLimit(face, errors));
+	if (rainFree === true && face.rainReaches)
+		list.push(rainLimit(face, faceIndex, APPLY, rainRoom(face.weather)));
+	if (sandCounts(step, face)) list.push(sandLimit(face, faceIndex, APPLY, errors));
 	return list;
 }
 
-/** Whether blowing sand shuts a step on a face: asked for, not kept off, and stated for the yard. */
-export function sandCounts({ limits }: Step, face: FaceConditions): boolean {
-	return limits.sand === 'none' && face.dustReaches && face.weather.sandStated;
-}
-
-/** Sand: the gust at 10 m stays under the one that lifts it. */
-export function sandLimit({ weather }: FaceConditions, errors: ErrorSeries) {
-	return {
-		limit: 'sand',
-		side: 'most',
-		unit: 'metresPerSecond',
-		value: weather.windGust,
-		bound: weather.sandLiftGust,
-		error: errors.gust,
-		modelled: true
-	} as const;
+/** The limits of the apply phase that ask the surface itself. */
+export function faceLimits(
+	{ limits }: Step,
+	face: FaceConditions,
+	faceIndex: number,
+	errors: ErrorSeries
+): Limit[] {
+	const { surfaceTemperature, spread, drySurface, noDirectSun, surfaceTrend } = limits;
+	const list: Limit[] = [];
+	const surface = (side: Limit['side'], value: Float64Array, bound: number): Limit =>
+		limitOn(face, faceIndex, side === 'least' ? 'cold' : 'hot', {
+			limit: 'surfaceTemperature',
+			phase: APPLY,
+			side,
+			unit: 'celsius',
+			value,
+			bound,
+			error: errors.surfaceTemperature,
+			modelled: true
+		});
+	// The coldest and the warmest spot must both be inside.
+	if (surfaceTemperature?.min !== undefined)
+		list.push(surface('least', face.surfaceShaded, surfaceTemperature.min));
+	if (surfaceTemperature?.max !== undefined)
+		list.push(surface('most', face.surfaceSunlit, surfaceTemperature.max));
+	if (spread !== undefined) list.push(spreadLimit(face, faceIndex, APPLY, spread.min, errors));
+	if (drySurface === true) list.push(filmLimit(face, faceIndex, APPLY));
+	if (noDirectSun === true) {
+		const { value, rooms } = directSunRoom(face.beam);
+		list.push(
+			limitOn(face, faceIndex, 'sun', {
+				limit: 'directSun',
+				phase: APPLY,
+				side: 'most',
+				unit: 'wattsPerSquareMetre',
+				value,
+				rooms,
+				bound: DIRECT_SUN,
+				modelled: true
+			})
+		);
+	}
+	if (surfaceTrend !== undefined) {
+		const { value, rooms } = trendRoom(face.surfaceShaded, surfaceTrend);
+		const isFalling = surfaceTrend === 'falling';
+		list.push(
+			limitOn(face, faceIndex, isFalling ? 'rising' : 'falling', {
+				limit: 'surfaceTrend',
+				phase: APPLY,
+				side: isFalling ? 'most' : 'least',
+				unit: 'kelvin',
+				value,
+				rooms,
+				bound: 0,
+				modelled: true
+			})
+		);
+	}
+	return list;
 }

@@ -3,10 +3,11 @@ import { daylightMask, workMask } from '../weather/calendar';
 import { flagBit } from '../weather/flags';
 import type { Site } from '../weather/site';
 import type { FaceConditions, SlotGrid, SlotWeather } from '../weather/slots';
-import { applyLimits } from './applyLimits';
+import { airLimits, faceLimits } from './applyLimits';
 import type { ErrorSeries } from './errors';
 import { leastRooms, limiterAt, limiterCode, takeLeast, type Limit } from './limit';
-import { dryingIsSilent, phaseLimits, type Phases } from './phases';
+import { facePhases, type FacePhases } from './phaseEnds';
+import { dryingIsSilent } from './phases';
 import { BROKEN, MOST_ROOM } from './roomSeries';
 import type { Step } from './step';
 import { windowMinima } from './windows';
@@ -24,7 +25,7 @@ export interface Judgement {
 	/** What must hold in the slot itself, of all faces. */
 	readonly apply: readonly Limit[];
 	/** What must hold afterwards, per face. */
-	readonly phases: readonly Phases[];
+	readonly phases: readonly FacePhases[];
 	readonly masks: StepMasks;
 	readonly silentDrying: boolean;
 }
@@ -79,8 +80,11 @@ export function judge(
 	const { weather } = conditions[0];
 	return {
 		weather,
-		apply: conditions.flatMap((face, i) => applyLimits(step, face, i, site, errors[i])),
-		phases: conditions.map((face, i) => phaseLimits(step, face, i, errors[i], null)),
+		apply: conditions.flatMap((face, i) => [
+			...airLimits(step, face, i, site, errors[i]),
+			...faceLimits(step, face, i, errors[i])
+		]),
+		phases: conditions.map((face, i) => facePhases(step, face, i, errors[i])),
 		masks: stepMasks(step, site, weather.grid),
 		silentDrying: dryingIsSilent(step)
 	};

@@ -30,7 +30,36 @@ export interface Limit {
 	readonly faceIndex: number;
 }
 
-export const limiterCode = (limiter: Limiter): number => LIMITERS.indexOf(limiter);
+const CODES = Object.fromEntries(LIMITERS.map((limiter, code) => [limiter, code]));
+
+export const limiterCode = (limiter: Limiter): number => CODES[limiter];
+
+/** What is told of a limit; what is left out is null, or read from the forecast. */
+type Told = Pick<Limit, 'limit' | 'phase' | 'side' | 'unit' | 'value'> & Partial<Limit>;
+
+/** A limit on a face. Written out field by field: members make many thousands of one shape. */
+export function limitOn(
+	face: FaceConditions,
+	faceIndex: number,
+	limiter: Limiter,
+	told: Told
+): Limit {
+	return {
+		limit: told.limit,
+		phase: told.phase,
+		limiter: limiterCode(limiter),
+		side: told.side,
+		unit: told.unit,
+		value: told.value,
+		bound: told.bound ?? null,
+		error: told.error ?? null,
+		rooms: told.rooms ?? null,
+		freezes: told.freezes ?? null,
+		modelled: told.modelled ?? false,
+		face,
+		faceIndex
+	};
+}
 
 const WET = limiterCode('wet');
 const FROST = limiterCode('frost');

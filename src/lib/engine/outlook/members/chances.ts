@@ -1,5 +1,4 @@
 import { errorSeries } from '../hours/errors';
-import { phaseRates } from '../hours/phases';
 import type { Step } from '../hours/step';
 import { workableSlots } from '../hours/workable';
 import type { Site } from '../weather/site';
@@ -28,12 +27,11 @@ export function stepChances(
 	site: Site,
 	durationSlots: number
 ): StepChances {
-	const rates = phaseRates(step);
 	const count = conditions[0]?.[0].weather.grid.count ?? 0;
 	const slots = new Uint16Array(count);
 	const starts = new Uint16Array(count);
 	const masks = conditions.map((faces) => {
-		const mask = workableSlots(step, faces, site, errorSeries(faces[0].weather), rates);
+		const mask = workableSlots(step, faces, site, errorSeries(faces[0].weather));
 		countRuns(mask, durationSlots, slots, starts);
 		return mask;
 	});

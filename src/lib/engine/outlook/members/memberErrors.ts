@@ -14,22 +14,26 @@ const FLOOR = 0.5;
  */
 function memberSpread(usual: Float64Array, series: readonly Float64Array[]): Float64Array {
 	if (series.length < FEWEST) return usual;
-	const out = new Float64Array(usual.length);
-	for (let i = 0; i < out.length; i++) {
-		let known = 0;
-		let mean = 0;
-		let squares = 0;
-		for (const values of series) {
-			const value = values[i];
-			if (value !== value) continue;
-			// Welford's running variance.
-			known++;
-			const off = value - mean;
-			mean += off / known;
-			squares += off * (value - mean);
+	const count = usual.length;
+	const known = new Uint16Array(count);
+	const sums = new Float64Array(count);
+	const squares = new Float64Array(count);
+	// Off the first member, so that the squares do not drown the differences.
+	const [first] = series;
+	for (const values of series) {
+		for (let i = 0; i < count; i++) {
+			const off = values[i] - (first[i] === first[i] ? first[i] : 0);
+			if (off !== off) continue;
+			known[i]++;
+			sums[i] += off;
+			squares[i] += off * off;
 		}
-		out[i] =
-			known < FEWEST ? usual[i] : Math.max(Math.sqrt(squares / (known - 1)), FLOOR * usual[i]);
+	}
+	const out = new Float64Array(count);
+	for (let i = 0; i < count; i++) {
+		const n = known[i];
+		const variance = n < FEWEST ? NaN : (squares[i] - (sums[i] * sums[i]) / n) / (n - 1);
+		out[i] = n < FEWEST ? usual[i] : Math.max(Math.sqrt(Math.max(0, variance)), FLOOR * usual[i]);
 	}
 	return out;
 }
