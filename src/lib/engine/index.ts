@@ -115,6 +115,18 @@ export { placeInWindow, startWindow, type StartWindow } from './outlook/plan/win
 export { REMEDY_CODES, type Remedy, type RemedyCode } from './outlook/remedies/remedy';
 export type { StepChances } from './outlook/members/chances';
 
+export type {
+	CoatingChain,
+	CoatingFace,
+	CoatingStep,
+	Surface,
+	Water
+} from './coating/compatibility/chain';
+export { compatibilityWarnings } from './coating/compatibility/compatibility';
+export { primeWithin } from './coating/compatibility/primeWithin';
+export type { CompatibilityRule } from './coating/compatibility/rule';
+export { COMPATIBILITY_RULES } from './coating/compatibility/rules';
+export type { CompatibilityCode, CompatibilityWarning } from './coating/compatibility/warnings';
 export { HAZARDS, type Hazard } from './coating/hazards';
 export {
 	defaultWind,
