@@ -127,7 +127,7 @@ describe('cure clock', () => {
 		if (has(inputs, 'q10') || has(inputs, 'r1'))
 			return 'a Q10 relation the engine does not state; its rows are checked';
 		if (inputs.highest_surface_temp_f !== undefined)
-			return 'a stepped recoat table: read by the stricter reading of a later version';
+			return 'a stepped recoat table: asserted of a sheet typed from it, in sheet.test.ts';
 		return 'a rule or limit in words, with no number the clock computes';
 	});
 
