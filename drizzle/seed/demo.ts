@@ -1,6 +1,12 @@
-import type { Limits, Method, ShelterName, StepKind } from '../../src/lib/engine';
+import type {
+	Limits,
+	Method,
+	SampleName,
+	ShelterName,
+	StepKind,
+	TaskCode
+} from '../../src/lib/engine';
 import type { FaceRow } from '../../src/lib/server/db/schema';
-import type { SampleSheetName } from './sheets';
 
 /** The demo yard: invented place, people, boats and jobs. */
 export const DEMO_YARD = {
@@ -58,7 +64,9 @@ export interface DemoStep {
 	hours: number;
 	/** Indices into the boat's faces. */
 	faces: number[];
-	sheet?: SampleSheetName;
+	sheet?: SampleName;
+	/** The rule of work without a sheet. */
+	task?: TaskCode;
 	limits?: Limits;
 	shelter?: ShelterName;
 }
@@ -74,8 +82,6 @@ export interface DemoBoat {
 	faces: DemoFace[];
 	jobs: { name: string; steps: DemoStep[] }[];
 }
-
-const DRY_WORK: Limits = { rainFree: true, drySurface: true, daylight: true, gust: { max: 13 } };
 
 export const DEMO_BOATS: DemoBoat[] = [
 	{
@@ -114,7 +120,7 @@ export const DEMO_BOATS: DemoBoat[] = [
 						method: 'roller',
 						hours: 2,
 						faces: [0],
-						sheet: 'barrierCoat'
+						sheet: 'epoxyBarrier'
 					},
 					{
 						name: 'antifouling 1',
@@ -184,7 +190,7 @@ export const DEMO_BOATS: DemoBoat[] = [
 						method: 'none',
 						hours: 3,
 						faces: [1],
-						limits: { airTemperature: { min: 3 }, daylight: true, gust: { max: 15 } }
+						task: 'wetSanding'
 					},
 					{
 						name: 'prime',
@@ -192,8 +198,7 @@ export const DEMO_BOATS: DemoBoat[] = [
 						method: 'roller',
 						hours: 2,
 						faces: [1],
-						sheet: 'epoxyPrimer',
-						limits: { wind: { max: 9 }, gust: { max: 12 } }
+						sheet: 'epoxyPrimer'
 					}
 				]
 			}
@@ -235,7 +240,8 @@ export const DEMO_BOATS: DemoBoat[] = [
 						method: 'brush',
 						hours: 0.75,
 						faces: [0],
-						sheet: 'runningGearPrimer'
+						sheet: 'aluminiumPrimer',
+						limits: { surfaceTrend: 'rising' }
 					}
 				]
 			},
@@ -248,7 +254,7 @@ export const DEMO_BOATS: DemoBoat[] = [
 						method: 'none',
 						hours: 0.75,
 						faces: [1],
-						limits: { wind: { max: 9 }, gust: { max: 12 }, windHeight: 10, daylight: true }
+						task: 'launch'
 					}
 				]
 			}
@@ -335,7 +341,7 @@ export const DEMO_BOATS: DemoBoat[] = [
 						method: 'none',
 						hours: 2,
 						faces: [1],
-						limits: { airTemperature: { min: 2 }, wind: { max: 12 }, daylight: true }
+						task: 'pressureWash'
 					},
 					{
 						name: 'degrease',
@@ -343,7 +349,7 @@ export const DEMO_BOATS: DemoBoat[] = [
 						method: 'none',
 						hours: 1,
 						faces: [0],
-						limits: DRY_WORK
+						task: 'degreasing'
 					}
 				]
 			}

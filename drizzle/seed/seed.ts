@@ -1,5 +1,5 @@
 import { eq } from 'drizzle-orm';
-import { FACE_ORIENTATIONS, localDate } from '../../src/lib/engine';
+import { FACE_ORIENTATIONS, localDate, SAMPLE_SHEETS } from '../../src/lib/engine';
 import { hashPassword } from '../../src/lib/server/access/passwords';
 import type { Database } from '../../src/lib/server/db/client';
 import {
@@ -17,7 +17,7 @@ import {
 	type Role
 } from '../../src/lib/server/db/schema';
 import { COLOURS, DEMO_BOATS, DEMO_PEOPLE, DEMO_YARD, type DemoBoat } from './demo';
-import { SAMPLE_SHEETS } from './sheets';
+import { demoStepRules } from './stepRules';
 
 type Transaction = Parameters<Parameters<Database['transaction']>[0]>[0];
 const ROLE_NAMES = Object.keys(DEMO_PEOPLE) as (keyof typeof DEMO_PEOPLE & Role)[];
@@ -109,7 +109,7 @@ async function insertBoat(
 						method: step.method,
 						durationMinutes: step.hours * 60,
 						sheetId: step.sheet === undefined ? null : (sheetIds.get(step.sheet) ?? null),
-						limits: step.limits ?? {},
+						...demoStepRules(job.steps, order),
 						shelter: step.shelter ?? 'open',
 						updatedAt: now
 					})
@@ -138,7 +138,14 @@ async function insertYard(tx: Transaction, now: Date, today: string): Promise<vo
 		const row = first(
 			await tx
 				.insert(sheets)
-				.values({ ...sheet, hazards: [...sheet.hazards], yardId, sample: true })
+				.values({
+					yardId,
+					name: sheet.name,
+					sample: true,
+					limits: sheet.limits,
+					times: sheet.times,
+					hazards: sheet.hazards
+				})
 				.returning({ id: sheets.id })
 		);
 		sheetIds.set(key, row.id);
