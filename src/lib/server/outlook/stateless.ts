@@ -17,14 +17,18 @@ import {
 import { tellPlan, tellRemedies, tellWarning } from './statelessPlans';
 
 /** The slots an answer tells, and their names. */
-interface Span {
+interface AnswerSpan {
 	readonly slots: readonly number[];
 	readonly end: number;
 	readonly at: (slot: number) => string;
 	readonly series: (values: Float64Array | Float32Array) => (number | null)[];
 }
 
-function spanOf({ weather: { grid } }: YardWeather, from: number, to: number | undefined): Span {
+function spanOf(
+	{ weather: { grid } }: YardWeather,
+	from: number,
+	to: number | undefined
+): AnswerSpan {
 	const first = Math.max(0, Math.floor((from - grid.start) / SLOT_SECONDS));
 	const end =
 		to === undefined
@@ -42,7 +46,7 @@ function spanOf({ weather: { grid } }: YardWeather, from: number, to: number | u
 function tellSlots(
 	{ weather, site }: YardWeather,
 	{ faces, step }: StepOutlook,
-	{ slots, at, series }: Span
+	{ slots, at, series }: AnswerSpan
 ): OutlookResponse['slots'] {
 	const [shown] = faces[0].sides;
 	const wind = workWind(shown, site, step.limits.windHeight);
@@ -67,7 +71,7 @@ function tellSlots(
 
 function tellStep(
 	{ hours, chances }: StepOutlook,
-	{ slots, end, at, series }: Span
+	{ slots, end, at, series }: AnswerSpan
 ): OutlookResponse['steps'][number] {
 	const chanceOf = (start: number): number | null =>
 		chances === null ? null : chances.starts[start] / chances.members;

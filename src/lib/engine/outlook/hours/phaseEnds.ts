@@ -1,11 +1,11 @@
 import { cureClock, finishSlots, type CureClock } from '../../coating/cure';
 import type { FaceConditions } from '../weather/slots';
-import { phasesOf, type Phase, type PhaseTime } from './phases';
+import { phasesOf, type PhaseLimits, type PhaseTime } from './phases';
 import type { ErrorSeries } from './errors';
 import type { Step } from './step';
 
 /** A phase with its end: its limits must hold in [i + 1, ends[i]), were the last stroke laid at the end of slot i. */
-export interface EndedPhase extends Phase {
+export interface EndedPhase extends PhaseLimits {
 	readonly ends: Int32Array;
 }
 

@@ -15,7 +15,7 @@ export type PhaseTime = (typeof PHASE_TIMES)[number];
  * Limits that must hold after the last stroke until each of some times is reached. A phase whose
  * end lies past the forecast is unknown, unless it `mayRunPast`.
  */
-export interface Phase {
+export interface PhaseLimits {
 	readonly limits: readonly Limit[];
 	readonly until: readonly PhaseTime[];
 	readonly mayRunPast: boolean;
@@ -48,7 +48,7 @@ export function phasesOf(
 	face: FaceConditions,
 	faceIndex: number,
 	errors: ErrorSeries
-): Phase[] {
+): PhaseLimits[] {
 	const { limits, times } = step;
 	const { rainFree, drySurface, spread, curing } = limits;
 	const drying = (['touchDry', 'keepDry'] as const).filter((name) => times[name] !== undefined);

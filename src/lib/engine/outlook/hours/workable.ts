@@ -6,7 +6,7 @@ import { airLimits, faceLimits } from './applyLimits';
 import type { ErrorSeries } from './errors';
 import { stepMasks } from './judge';
 import { markBroken } from './limit';
-import { dryingIsSilent, phasesOf, type Phase, type PhaseTime } from './phases';
+import { dryingIsSilent, phasesOf, type PhaseLimits, type PhaseTime } from './phases';
 import type { Step } from './step';
 
 /** Slots that the air alone shuts, by the limits that ask it; kept for the faces that share the air. */
@@ -31,7 +31,7 @@ function shutByAir(step: Step, face: FaceConditions, site: Site, errors: ErrorSe
 
 /** Shuts the slots after which a phase would not hold until its clocks are done. */
 function shutByPhase(
-	phase: Phase,
+	phase: PhaseLimits,
 	face: FaceConditions,
 	progressOf: (name: PhaseTime) => Float64Array | null,
 	broken: Uint8Array,
