@@ -33,7 +33,9 @@ function outlookNumbers(
 			states: outlook.steps.map(({ hours }) => [...hours.state]),
 			limiters: outlook.steps.map(({ hours }) => [...hours.limiter]),
 			chances: outlook.steps.map(({ chances }) => [...(chances?.slots ?? [])]),
-			starts: Object.values(outlook.plans).map((plan) => plan?.steps.map(({ start }: { start: number }) => start)),
+			starts: Object.values(outlook.plans).map((plan) =>
+				plan?.steps.map(({ start }: { start: number }) => start)
+			),
 			holdChances: Object.values(outlook.plans).map((plan) => plan?.holdChance),
 			launchReady: Object.values(outlook.plans).map((plan) => plan?.launchReady),
 			warnings: outlook.warnings
