@@ -232,8 +232,8 @@ const known = (drive: SurfaceDrive, shortwave: Float64Array, i: number): boolean
 
 /**
  * Runs the balance over a grid of quarter-hours, writing temperature (°C) and film (mm) at slot
- * starts. NaN drives give NaN in that slot; the run starts again after the gap. Every start cycles
- * the day after it once with a dry film, so that it does not remember a guessed temperature.
+ * starts. NaN drives give NaN in that slot; the run starts again after the gap, wet. Every start
+ * cycles the day after it once with a dry film, so that it does not remember a guessed temperature.
  *
  * @param stepsPerSlot - one step a slot is within 0.3 K root mean square of three (benchmark)
  * @returns slots at which the run started (again)
@@ -272,7 +272,8 @@ export function runSurface(
 			null,
 			null
 		);
-		state.film = 0;
+		// What fell or settled in a gap nobody knows: the face comes out of it wet.
+		state.film = starts.length === 0 ? 0 : body.runOffDepth;
 		advance(drive, shortwave, body, state, i, end, false, stepsPerSlot, temperature, film);
 		starts.push(i);
 		i = end;
