@@ -111,6 +111,7 @@ export {
 	type Slip
 } from './outlook/plan/launch';
 export { brokenSteps, type BrokenStep } from './outlook/plan/broken';
+export { latestFinishFor, nextBounds } from './outlook/plan/inverse';
 export { placeInWindow, startWindow, type StartWindow } from './outlook/plan/window';
 export { REMEDY_CODES, type Remedy, type RemedyCode } from './outlook/remedies/remedy';
 export type { StepChances } from './outlook/members/chances';

@@ -2,44 +2,18 @@ import { LIMITERS } from '../../vocabulary';
 import type { StepOutlook } from '../job/stepOutlook';
 import { SLOT_SECONDS } from '../weather/slots';
 import type { YardWeather } from '../weather/yardWeather';
-import { reachedAt } from './clocks';
 import { holdChance } from './hold';
+import { nextBounds } from './inverse';
 import { instantAt, slipOf, type LaunchWish } from './launch';
 import { launchClosesAfter, launchReadyAfter } from './launchReady';
-import { overcoatTable } from './links';
 import type { RankedWay } from './objectives';
 import type { LaunchReady, Plan, PlannedStep } from './plan';
-import { isCoat, type PlanStep } from './planStep';
+import { isCoat } from './planStep';
 
 /** A step of a chain, with its place in the job; −1 for one that the planner put in. */
 export interface ChainStep {
 	readonly index: number;
 	readonly outlook: StepOutlook;
-}
-
-/** When the next coat may start after a step at its planned place, as slot positions. */
-function nextBounds(
-	{ step, faces, duration }: PlanStep,
-	start: number,
-	finish: number
-): { earliest: number; latest: number } {
-	const sides = faces.flatMap((face) => face.sides);
-	const curingMin = step.limits.curing?.min ?? -Infinity;
-	const opens = isCoat(step.kind) ? overcoatTable({ step }) : undefined;
-	const closes = isCoat(step.kind) ? step.times.overcoatMax : step.times.coatWithin;
-	const after = (
-		table: Parameters<typeof reachedAt>[0]['table'] | undefined,
-		side: 'earliest' | 'latest',
-		position: number
-	): number =>
-		table === undefined || table === null
-			? Infinity
-			: reachedAt({ table, sides, side, curingMin }, Float64Array.of(position))[0];
-	return {
-		earliest: after(opens, 'earliest', finish),
-		// Both strokes: a next step as long as this one.
-		latest: Math.min(after(closes, 'latest', start), after(closes, 'latest', finish) - duration)
-	};
 }
 
 function plannedStep(
@@ -51,7 +25,7 @@ function plannedStep(
 	const { candidates, isFixed } = planStep;
 	const start = candidates.start[taken];
 	const finish = candidates.finish[taken];
-	const next = nextBounds(planStep, start, finish);
+	const next = nextBounds(planStep, { start, finish });
 	return {
 		step: index < 0 ? null : index,
 		kind: outlook.step.kind,
