@@ -55,7 +55,10 @@ export async function requireMembership(
 }
 
 /** The condition on `boats` that leaves only those a member may see. */
-export function visibleBoats(db: Database, { yard, role, user }: Membership): SQL | undefined {
+export function visibleBoats(
+	db: Database,
+	{ yard, role, user }: { yard: Pick<Yard, 'id'>; role: Role; user: Pick<SignedInUser, 'id'> }
+): SQL | undefined {
 	const inYard = eq(boats.yardId, yard.id);
 	switch (role) {
 		case 'manager':
@@ -78,7 +81,7 @@ export function visibleBoats(db: Database, { yard, role, user }: Membership): SQ
 /** The yards of a person, by name. */
 export function yardsOf(db: Database, userId: string) {
 	return db
-		.select({ slug: yards.slug, name: yards.name, role: memberships.role })
+		.select({ id: yards.id, slug: yards.slug, name: yards.name, role: memberships.role })
 		.from(memberships)
 		.innerJoin(yards, eq(yards.id, memberships.yardId))
 		.where(eq(memberships.userId, userId))

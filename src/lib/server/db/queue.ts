@@ -1,4 +1,4 @@
-import { and, asc, eq, inArray, type SQL } from 'drizzle-orm';
+import { and, asc, count, eq, inArray, type SQL } from 'drizzle-orm';
 import type { Database } from './client';
 import { boats, faces, jobs, sheets, stands, stepFaces, steps, type FaceRow } from './schema';
 
@@ -63,6 +63,17 @@ export async function queuedSteps(db: Database, which: SQL | undefined, only?: s
 		else of.push(face);
 	}
 	return rows.map((row) => ({ ...row, faces: facesOf.get(row.step.id) ?? [] }));
+}
+
+/** How many queued steps some boats have. */
+export async function queuedStepCount(db: Database, which: SQL | undefined): Promise<number> {
+	const [row] = await db
+		.select({ steps: count() })
+		.from(steps)
+		.innerJoin(jobs, eq(jobs.id, steps.jobId))
+		.innerJoin(boats, eq(boats.id, jobs.boatId))
+		.where(and(which, eq(steps.state, 'queued')));
+	return row.steps;
 }
 
 /** Every boat of a yard, for work that no person asks for. */
