@@ -41,6 +41,11 @@ export function near(actual: number, expected: number, tolerance: number, it: Pu
 	).toBeLessThanOrEqual(tolerance);
 }
 
+/** Every case of a file. */
+export function casesOf(file: string): PublishedCase[] {
+	return fileSchema.parse(JSON.parse(readFixture(file))).cases;
+}
+
 /** What is done with a case: checked, or left out for a reason. */
 export type Ruling = (() => void) | string;
 
@@ -54,7 +59,7 @@ export function everyCase(
 	least: number,
 	rule: (it: PublishedCase, index: number) => Ruling
 ): void {
-	const { cases } = fileSchema.parse(JSON.parse(readFixture(file)));
+	const cases = casesOf(file);
 	const leftOut: string[] = [];
 	let asserted = 0;
 	cases.forEach((it, index) => {

@@ -165,3 +165,34 @@ export { SUBSTRATES, type Substrate } from './coating/sheet/substrates';
 export { SAMPLE_SHEETS, type SampleName } from './coating/samples/samples';
 export { taskOf, TASKS, type TaskCode } from './coating/tasks/tasks';
 export type { Task } from './coating/tasks/task';
+
+export {
+	FEW_READINGS,
+	biasCorrection,
+	ownUsualErrors,
+	type BiasCorrection
+} from './scoring/correction';
+export {
+	chanceScore,
+	toldChanceSchema,
+	type ChanceScore,
+	type ReliabilityBin,
+	type ToldChance
+} from './scoring/chances';
+export {
+	forecastErrors,
+	forecastPairSchema,
+	SCORED_QUANTITIES,
+	type ForecastErrors,
+	type ForecastPair,
+	type ScoredQuantity
+} from './scoring/errors';
+export { PLUME_REACH, type Place, type PlumeActivity } from './met/plume';
+export {
+	plumeConflicts,
+	quietStart,
+	type DustyWork,
+	type ExposedWork,
+	type PlumeConflict
+} from './outlook/neighbours/conflicts';
+export { strictVerdict, type StrictBand, type StrictVerdict } from './coating/strictWindow';
