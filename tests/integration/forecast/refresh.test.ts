@@ -72,12 +72,29 @@ describe('a refresh on the database', () => {
 		expect(await states()).toMatchObject([
 			{ yardId: yard.id, provider: 'open-meteo', failures: 0, lastSuccessAt: at(0), trouble: null }
 		]);
-		const current = await currentForecast(database.db, yard, at(10));
+		const current = await currentForecast(database.db, yard, at(10), { members: true });
 		const [run] = await runs();
 		expect(current?.runId).toBe(run.id);
 		expect(current?.forecast).toEqual({ issuedAt: NOW, hourly: run.hourly, members: run.members });
 		expect(current?.forecast.members).toHaveLength(3);
 		expect(current?.source).toMatchObject({ origin: 'provider', ageMinutes: 10, stale: false });
+	});
+
+	it('leaves the members where they are until they are asked for, and still knows how many', async () => {
+		await refresh();
+		const [{ id, hourly }] = await runs();
+		const current = await currentForecast(database.db, yard, at(10));
+		expect(current?.forecast).toEqual({ issuedAt: NOW, hourly });
+		expect(current?.source.members).toBe(3);
+		expect(await databaseStore(database.db).run(id)).not.toHaveProperty('members');
+	});
+
+	it('counts none in a run without members', async () => {
+		fake.setFaults({ 'open-meteo-ensemble': [{ kind: 'serverError' }] });
+		await refresh();
+		const current = await currentForecast(database.db, yard, at(10), { members: true });
+		expect(current?.source.members).toBe(0);
+		expect(current?.forecast).not.toHaveProperty('members');
 	});
 
 	it('is done once when several processes come at once', async () => {

@@ -1,15 +1,14 @@
 import type { ForecastSource } from '../../api/hours';
-import type { Forecast } from '../../engine';
+import type { Forecast, Member } from '../../engine';
 import type { Database } from '../db/client';
-import type { ForecastRun } from '../db/schema';
 import { CREDITS } from './credit';
 import { databaseStore } from './databaseStore';
 import { HISTORY_SECONDS, missingHistory, withHistory, type EarlierRun } from './history';
 import type { ForecastYard } from './refresh';
-import type { ForecastStore, ProviderState, RunHead, RunHours } from './store';
+import type { ForecastStore, ProviderState, RunHead, RunHours, StoredRun } from './store';
 
 export interface CurrentForecast {
-	/** The stored run, with the hours before it from earlier runs. */
+	/** The stored run, with the hours before it from earlier runs; members only where asked for. */
 	forecast: Forecast;
 	/** Identifies the run. */
 	runId: string;
@@ -31,21 +30,28 @@ const RUNS_AT_A_TIME = 8;
  * `fetchedAt` and the age count from when the provider last said that this run is its latest, be
  * it by sending it or by confirming it.
  *
+ * @param wanted - `members`: read the ensemble's members too, half a megabyte of them
  * @returns null when nothing was ever stored
  */
 export function currentForecast(
 	db: Database,
 	yard: ForecastYard,
-	now: Date
+	now: Date,
+	wanted?: Wanted
 ): Promise<CurrentForecast | null> {
-	return currentFrom(databaseStore(db), yard, now);
+	return currentFrom(databaseStore(db), yard, now, wanted);
+}
+
+interface Wanted {
+	members: boolean;
 }
 
 /** `currentForecast` on a given store. */
 export async function currentFrom(
 	store: ForecastStore,
 	yard: ForecastYard,
-	now: Date
+	now: Date,
+	wanted: Wanted = { members: false }
 ): Promise<CurrentForecast | null> {
 	const states = await store.states(yard.id);
 	const candidates = (await store.latestRuns(yard.id)).map((run) =>
@@ -59,12 +65,14 @@ export async function currentFrom(
 	const chosen = choose(candidates, yard);
 	if (chosen === undefined) return null;
 	const run = await store.run(chosen.run.id);
+	const asked = wanted.members && chosen.run.memberCount > 0;
+	const members = asked ? await store.members(chosen.run.id) : null;
 	// Pruned between two reads: only where a newer one has come.
-	if (run === null) return currentFrom(store, yard, now);
+	if (run === null || (asked && members === null)) return currentFrom(store, yard, now, wanted);
 	return {
-		forecast: await withStoredHistory(store, run),
+		forecast: await withStoredHistory(store, run, members),
 		runId: run.id,
-		source: describe(chosen, run, yard, ownState, now)
+		source: describe(chosen, yard, ownState, now)
 	};
 }
 
@@ -91,7 +99,11 @@ function choose(candidates: Candidate[], yard: ForecastYard): Candidate | undefi
 	return current.find(isOwn) ?? current[0] ?? latestFirst[0];
 }
 
-async function withStoredHistory(store: ForecastStore, run: ForecastRun): Promise<Forecast> {
+async function withStoredHistory(
+	store: ForecastStore,
+	run: StoredRun,
+	members: Member[] | null
+): Promise<Forecast> {
 	const seconds = (date: Date) => Math.floor(date.getTime() / 1000);
 	const asEarlier = ({ issuedAt, hourly }: RunHours): EarlierRun => ({
 		issuedAt: seconds(issuedAt),
@@ -99,7 +111,7 @@ async function withStoredHistory(store: ForecastStore, run: ForecastRun): Promis
 	});
 	let forecast: Forecast = {
 		...asEarlier(run),
-		...(run.members === null ? {} : { members: run.members })
+		...(members === null ? {} : { members })
 	};
 	// Newest first and few at a time: one run of a provider with past hours fills the whole window.
 	const since = new Date(run.issuedAt.getTime() - EARLIEST_ISSUE_MS);
@@ -118,7 +130,6 @@ async function withStoredHistory(store: ForecastStore, run: ForecastRun): Promis
 
 function describe(
 	{ run, confirmedAt, overdue }: Candidate,
-	{ members }: ForecastRun,
 	yard: ForecastYard,
 	ownState: ProviderState | undefined,
 	now: Date
@@ -140,7 +151,7 @@ function describe(
 		ageMinutes,
 		stale: ageMinutes > STALE_AFTER_MINUTES,
 		attribution,
-		members: members?.length ?? 0,
+		members: run.memberCount,
 		trouble: origin === 'provider' ? null : trouble
 	};
 }

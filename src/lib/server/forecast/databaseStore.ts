@@ -14,8 +14,8 @@ const LOCK_SPACE = 0x59474c46;
  * the writes: a process that dies leaves neither lock nor half a run.
  */
 export function databaseStore(db: Database | Transaction): ForecastStore {
-	const { id, yardId, provider, issuedAt, fetchedAt } = forecastRuns;
-	const head = { id, yardId, provider, issuedAt, fetchedAt };
+	const { id, yardId, provider, issuedAt, fetchedAt, hourly, members, memberCount } = forecastRuns;
+	const head = { id, yardId, provider, issuedAt, fetchedAt, memberCount };
 	return {
 		withYardLock: (yard, work) =>
 			db.transaction(async (tx) => {
@@ -45,13 +45,21 @@ export function databaseStore(db: Database | Transaction): ForecastStore {
 				.orderBy(provider, desc(fetchedAt), desc(issuedAt)),
 
 		run: async (runId) => {
-			const [run] = await db.select().from(forecastRuns).where(eq(id, runId));
+			const [run] = await db
+				.select({ ...head, hourly })
+				.from(forecastRuns)
+				.where(eq(id, runId));
 			return run ?? null;
+		},
+
+		members: async (runId) => {
+			const [run] = await db.select({ members }).from(forecastRuns).where(eq(id, runId));
+			return run?.members ?? null;
 		},
 
 		earlierRuns: (yard, since, before, limit) =>
 			db
-				.select({ issuedAt, fetchedAt, hourly: forecastRuns.hourly })
+				.select({ issuedAt, fetchedAt, hourly })
 				.from(forecastRuns)
 				.where(and(eq(yardId, yard), gte(issuedAt, since), lt(fetchedAt, before)))
 				.orderBy(desc(fetchedAt))

@@ -3,8 +3,10 @@ import type { ForecastRun, ProviderName, providerStates } from '../db/schema';
 
 export type ProviderState = typeof providerStates.$inferSelect;
 
+/** A run without its members. */
+export type StoredRun = Omit<ForecastRun, 'members'>;
 /** A run without its series. */
-export type RunHead = Omit<ForecastRun, 'hourly' | 'members'>;
+export type RunHead = Omit<StoredRun, 'hourly'>;
 /** A run as another run's history needs it. */
 export type RunHours = Pick<ForecastRun, 'issuedAt' | 'fetchedAt' | 'hourly'>;
 
@@ -31,7 +33,13 @@ export interface ForecastStore {
 	/** The newest run of each provider. */
 	latestRuns(yardId: string): Promise<RunHead[]>;
 	/** @returns null when it has been pruned meanwhile */
-	run(runId: string): Promise<ForecastRun | null>;
+	run(runId: string): Promise<StoredRun | null>;
+	/**
+	 * A run's ensemble members: ten times the rest of it, so read only by whoever judges in them.
+	 *
+	 * @returns null when it has none or has been pruned meanwhile
+	 */
+	members(runId: string): Promise<Member[] | null>;
 	/** Runs fetched before `before` and issued since `since`, newest first, at most `limit`. */
 	earlierRuns(yardId: string, since: Date, before: Date, limit: number): Promise<RunHours[]>;
 	/** @returns the new run's id */

@@ -41,6 +41,7 @@ export function memoryStore() {
 				)
 			),
 		run: (runId) => Promise.resolve(runs.find(({ id }) => id === runId) ?? null),
+		members: (runId) => Promise.resolve(runs.find(({ id }) => id === runId)?.members ?? null),
 		earlierRuns: (yardId, since, before, limit) =>
 			Promise.resolve(
 				newestFirst(yardId)
@@ -49,7 +50,7 @@ export function memoryStore() {
 			),
 		addRun(run) {
 			const id = `run-${runs.length + 1}`;
-			runs = [...runs, { ...run, id }];
+			runs = [...runs, { ...run, id, memberCount: run.members?.length ?? 0 }];
 			return Promise.resolve(id);
 		},
 		prune(yardId, now) {

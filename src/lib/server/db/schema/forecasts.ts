@@ -1,3 +1,4 @@
+import { sql } from 'drizzle-orm';
 import {
 	index,
 	integer,
@@ -27,7 +28,11 @@ export const forecastRuns = pgTable(
 		issuedAt: timestamp({ withTimezone: true }).notNull(),
 		fetchedAt: timestamp({ withTimezone: true }).notNull(),
 		hourly: jsonb().$type<Hourly>().notNull(),
-		members: jsonb().$type<Member[]>()
+		members: jsonb().$type<Member[]>(),
+		/** Beside the members themselves, half a megabyte that saying how many there are need not read. */
+		memberCount: integer()
+			.notNull()
+			.generatedAlwaysAs(sql`coalesce(jsonb_array_length("members"), 0)`)
 	},
 	(table) => [index().on(table.yardId, table.fetchedAt.desc())]
 );

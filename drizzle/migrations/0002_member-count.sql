@@ -1,0 +1,1 @@
+ALTER TABLE "forecast_runs" ADD COLUMN "member_count" integer GENERATED ALWAYS AS (coalesce(jsonb_array_length("members"), 0)) STORED NOT NULL;
