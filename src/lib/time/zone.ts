@@ -5,6 +5,7 @@ export type Instant = number | string;
 
 type Field = 'weekday' | 'day' | 'month' | 'year' | 'hour' | 'minute';
 
+// Making one takes as long as a hundred uses.
 const formatters = new Map<string, Intl.DateTimeFormat>();
 
 function formatterOf(timeZone: string): Intl.DateTimeFormat {
@@ -12,7 +13,7 @@ function formatterOf(timeZone: string): Intl.DateTimeFormat {
 	if (known) return known;
 	const made = new Intl.DateTimeFormat('en-US', {
 		timeZone,
-		weekday: 'short',
+		weekday: 'long',
 		day: 'numeric',
 		month: 'short',
 		year: 'numeric',
@@ -43,22 +44,25 @@ export function clock(instant: Instant, timeZone: string): string {
 	return `${hour}:${minute}`;
 }
 
+/** "Wed": short for "Wednesday" in English is its first three letters. */
+const short = (weekday: string): string => weekday.slice(0, 3);
+
 /** "Wed 13" */
 export function day(instant: Instant, timeZone: string): string {
 	const it = shown(instant, timeZone);
-	return `${it.weekday} ${it.day}`;
+	return `${short(it.weekday)} ${it.day}`;
 }
 
 /** "Wed 09:45" */
 export function dayAndClock(instant: Instant, timeZone: string): string {
 	const it = shown(instant, timeZone);
-	return `${it.weekday} ${it.hour}:${it.minute}`;
+	return `${short(it.weekday)} ${it.hour}:${it.minute}`;
 }
 
 /** "Wed 13 May, 09:45" */
 export function dateAndClock(instant: Instant, timeZone: string): string {
 	const it = shown(instant, timeZone);
-	return `${it.weekday} ${it.day} ${it.month}, ${it.hour}:${it.minute}`;
+	return `${short(it.weekday)} ${it.day} ${it.month}, ${it.hour}:${it.minute}`;
 }
 
 /** A slot at which a local hour begins. */
@@ -93,6 +97,5 @@ export function sameClock(instant: Instant, one: string, other: string): boolean
 
 /** "Wednesday" */
 export function weekday(instant: Instant, timeZone: string): string {
-	const time = typeof instant === 'string' ? Date.parse(instant) : instant;
-	return new Intl.DateTimeFormat('en-US', { timeZone, weekday: 'long' }).format(time);
+	return shown(instant, timeZone).weekday;
 }

@@ -6,7 +6,8 @@ import {
 	day,
 	dayAndClock,
 	localHours,
-	sameClock
+	sameClock,
+	weekday
 } from '../../../src/lib/time/zone';
 
 const LISBON = 'Europe/Lisbon';
@@ -18,6 +19,28 @@ describe('texts in the yard’s zone', () => {
 		expect(day(instant, LISBON)).toBe('Wed 13');
 		expect(dayAndClock(instant, 'Australia/Hobart')).toBe('Wed 18:45');
 		expect(dateAndClock(Date.parse(instant), LISBON)).toBe('Wed 13 May, 09:45');
+	});
+
+	test('a weekday has its whole name or its first three letters', () => {
+		const days = Array.from({ length: 7 }, (_, i) => Date.UTC(2026, 4, 10 + i, 12));
+		expect(days.map((it) => weekday(it, LISBON))).toEqual([
+			'Sunday',
+			'Monday',
+			'Tuesday',
+			'Wednesday',
+			'Thursday',
+			'Friday',
+			'Saturday'
+		]);
+		expect(days.map((it) => day(it, LISBON).split(' ')[0])).toEqual([
+			'Sun',
+			'Mon',
+			'Tue',
+			'Wed',
+			'Thu',
+			'Fri',
+			'Sat'
+		]);
 	});
 
 	test('midnight is 00:00 of the day it begins', () => {
