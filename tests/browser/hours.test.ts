@@ -1,4 +1,4 @@
-import { expect, test, type Page } from '@playwright/test';
+import { expect, test, type Locator, type Page } from '@playwright/test';
 import { hoursSchema, type Hours } from '../../src/lib/api/hours';
 import { readingSchema } from '../../src/lib/api/reading';
 import { dayAndClock } from '../../src/lib/time/zone';
@@ -16,6 +16,15 @@ const startOf = (hours: Hours, slot: number) => Date.parse(hours.start) + slot *
 const timeOf = (hours: Hours, slot: number) =>
 	dayAndClock(startOf(hours, slot), hours.yard.timeZone);
 const battens = (page: Page) => page.locator('[role=slider]:not([aria-label=Weather])');
+
+/** A place in a drawing of the axis, px from the left of the page: the middle of a slot. */
+async function placeOf(drawing: Locator, slot: number): Promise<{ x: number; y: number }> {
+	const box = await drawing.boundingBox();
+	if (!box) throw new Error('it is nowhere');
+	const from = Number(await drawing.getAttribute('aria-valuemin'));
+	const slots = Number(await drawing.getAttribute('aria-valuemax')) + 1 - from;
+	return { x: box.x + (box.width * (slot + 0.5 - from)) / slots, y: box.y + box.height / 2 };
+}
 
 /** Every fault the browser itself reports: a script's, a resource's, the content policy's. */
 function faultsOf(page: Page): string[] {
@@ -54,13 +63,8 @@ test.describe('the Hours page on a desktop', () => {
 		const hours = await hoursOf(page);
 		const [step] = hours.boats[0].steps;
 		const slot = hours.days[1].startSlot + 46;
-		const batten = battens(page).first();
-		const box = await batten.boundingBox();
-		if (!box) throw new Error('the batten is nowhere');
-		await page.mouse.click(
-			box.x + (box.width * (slot + 0.5)) / hours.slotCount,
-			box.y + box.height / 2
-		);
+		const { x, y } = await placeOf(battens(page).first(), slot);
+		await page.mouse.click(x, y);
 		const at = new Date(startOf(hours, slot)).toISOString();
 		const answer = await page.request.get(`${API}/steps/${step.id}/reading?at=${at}`);
 		const reading = readingSchema.parse(await answer.json());
@@ -116,10 +120,9 @@ test.describe('the Hours page on a desktop', () => {
 		await signIn(page, 'manager');
 		const hours = await hoursOf(page);
 		const weather = page.getByRole('slider', { name: 'Weather' });
-		const box = await weather.boundingBox();
-		if (!box) throw new Error('no weather');
 		const slot = 150;
-		await page.mouse.move(box.x + (box.width * (slot + 0.5)) / hours.slotCount, box.y + 40);
+		const { x, y } = await placeOf(weather, slot);
+		await page.mouse.move(x, y);
 		const air = hours.bands.airTemperature[slot] ?? NaN;
 		await expect(page.getByText(`air ${air.toFixed(1)}°`)).toBeVisible();
 		await expect(page.getByText(timeOf(hours, slot), { exact: true })).toBeVisible();

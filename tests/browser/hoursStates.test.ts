@@ -31,6 +31,19 @@ test.describe('on a desktop', () => {
 		await expect(page.getByText('09:45', { exact: true }).first()).toBeVisible();
 	});
 
+	test('by day four days and their labels fit between the margins; at night no hour is left out', async ({
+		page
+	}) => {
+		const wider = () => page.locator('.board').evaluate((it) => it.scrollWidth - it.clientWidth);
+		await nextHours(page, hoursFixture());
+		await expect(page.getByRole('heading', { level: 1 })).toContainText('Marigold');
+		expect(await wider()).toBe(0);
+		await page.unrouteAll();
+		await nextHours(page, hoursFixture({ now: '2026-05-11T23:20:00.000Z' }));
+		await expect(page.locator('svg text', { hasText: /^00:20$/ })).toBeVisible();
+		expect(await wider()).toBe(24);
+	});
+
 	test('a stale forecast is drawn as ever, its age said in words and beside every step', async ({
 		page
 	}) => {

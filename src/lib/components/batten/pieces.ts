@@ -1,5 +1,5 @@
 import type { Run } from '$lib/api/hours';
-import { overlap, type Span } from '../charts/axis';
+import { cut, type Span } from '../charts/axis';
 
 /** A stretch of lath that is bare because something is missing, and what. */
 export interface MissingPiece extends Span {
@@ -27,10 +27,7 @@ function joined(runs: readonly Run[], state: Run['state']): Span[] {
 
 /** Runs inside a window: neighbours in one state are one coat or one length of tape. */
 export function pieces(runs: readonly Run[], window: Span): Pieces {
-	const inside = runs.flatMap((run) => {
-		const part = overlap(run, window);
-		return part ? [{ ...run, ...part }] : [];
-	});
+	const inside = cut(runs, window);
 	return {
 		painted: joined(inside, 'open'),
 		taped: joined(inside, 'tight'),

@@ -40,6 +40,14 @@ export function overlap(one: Span, other: Span): Span | null {
 	return from < to ? { from, to } : null;
 }
 
+/** What of some spans lies inside a window, cut to it. */
+export function cut<S extends Span>(spans: readonly S[], window: Span): S[] {
+	return spans.flatMap((it) => {
+		const part = overlap(it, window);
+		return part ? [{ ...it, ...part }] : [];
+	});
+}
+
 /** An axis over the whole page, or over a window of it. */
 export function createAxis(source: AxisSource, pxPerHour: number, window?: Span): Axis {
 	const { from, to } = window ?? { from: 0, to: source.slotCount };
@@ -56,7 +64,7 @@ export function createAxis(source: AxisSource, pxPerHour: number, window?: Span)
 			(it) => it.slot >= from && it.slot < to
 		),
 		midnights: source.days.map((it) => it.startSlot).filter((it) => it > from && it < to),
-		nights: source.nights.flatMap((it) => overlap(it, { from, to }) ?? []),
+		nights: cut(source.nights, { from, to }),
 		atDayStart: source.days.some((it) => it.startSlot === from),
 		atDayEnd: source.days.some((it) => it.startSlot + it.slots === to)
 	};

@@ -1,4 +1,5 @@
 import type { Hours, HoursStep } from '$lib/api/hours';
+import { SLOTS_PER_HOUR } from '$lib/time/slots';
 import type { Units } from '$lib/units/quantity';
 import type { Axis } from '../charts/axis';
 import type { ReadingLine } from '../charts/readingLine.svelte';
@@ -38,6 +39,16 @@ export interface Board {
 	/** The numbers of the reading line stand on its left, the right edge being near. */
 	readonly flip: boolean;
 	readonly onopen: (place: Place) => void;
+}
+
+/** Hours the wide axis holds: with the labels they fill 1440 px between its margins. */
+const WIDE_HOURS = 94;
+
+/** Where the wide axis begins, as a slot: today's first hours are left out once they are past. */
+export function wideStart(slotCount: number, nowSlot: number): number {
+	const over = Math.max(0, Math.ceil(slotCount / SLOTS_PER_HOUR) - WIDE_HOURS);
+	const past = Math.max(0, Math.floor(nowSlot / SLOTS_PER_HOUR));
+	return Math.min(over, past) * SLOTS_PER_HOUR;
 }
 
 /** px an hour and figures, by layout. */

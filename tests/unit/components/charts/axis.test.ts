@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import { createAxis, dayOf, overlap } from '../../../../src/lib/components/charts/axis';
+import { createAxis, cut, dayOf, overlap } from '../../../../src/lib/components/charts/axis';
 import { linear } from '../../../../src/lib/components/charts/linear';
 import { at, hoursFixture } from '../../../fixtures/hours';
 
@@ -61,6 +61,14 @@ test('a day of 92 slots moves the next midnight with it', () => {
 test('spans that only touch have nothing in common', () => {
 	expect(overlap({ from: 0, to: 4 }, { from: 4, to: 8 })).toBeNull();
 	expect(overlap({ from: 0, to: 5 }, { from: 4, to: 8 })).toEqual({ from: 4, to: 5 });
+});
+
+test('what is cut to a window keeps what it says, and what lies outside is left out', () => {
+	const spans = [
+		{ from: 0, to: 6, state: 'lifting' },
+		{ from: 10, to: 12, state: 'blowing' }
+	];
+	expect(cut(spans, { from: 4, to: 10 })).toEqual([{ from: 4, to: 6, state: 'lifting' }]);
 });
 
 test('a straight scale runs there and back', () => {
