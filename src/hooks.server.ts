@@ -4,6 +4,7 @@ import { env } from '$env/dynamic/private';
 import { composeWeb } from '$lib/server/composition';
 import { failure } from '$lib/server/hooks/failure';
 import { jsonOrigin } from '$lib/server/hooks/jsonOrigin';
+import { preload } from '$lib/server/hooks/preload';
 import { requestId } from '$lib/server/hooks/requestId';
 import { securityHeaders } from '$lib/server/hooks/securityHeaders';
 import { session } from '$lib/server/hooks/session';
@@ -15,5 +16,5 @@ export const init: ServerInit = () => {
 	process.once('sveltekit:shutdown', () => void composition.close());
 };
 
-export const handle = sequence(requestId, securityHeaders, session, jsonOrigin);
+export const handle = sequence(requestId, securityHeaders, session, jsonOrigin, preload);
 export const handleError = failure;

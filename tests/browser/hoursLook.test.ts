@@ -116,6 +116,60 @@ test.describe('what a phone must load', () => {
 	});
 });
 
+test.describe('the faces', () => {
+	const fileOf = (path: string) => path.split('/').at(-1) ?? '';
+	/** Files of the faces that the page was in the end set in. */
+	const used = async (page: Page) => {
+		await page.evaluate(() => document.fonts.ready);
+		const names = await page.evaluate(() =>
+			performance.getEntriesByType('resource').map(({ name }) => name)
+		);
+		return names
+			.filter((it) => it.endsWith('.woff2'))
+			.map(fileOf)
+			.sort();
+	};
+	const loaded = (page: Page) =>
+		page.evaluate(() => [...document.fonts].filter((it) => it.status === 'loaded').length);
+
+	test('are asked for with the page, those it is set in and no others', async ({ page }) => {
+		for (const path of ['/', '/sign-in', YARD_PATH]) {
+			if (path === YARD_PATH) await signIn(page, 'owner');
+			const answer = await page.goto(path);
+			const links = (await answer?.headerValue('link')) ?? '';
+			const asked = [...links.matchAll(/<([^>]+\.woff2)>; rel="preload"/g)].map((it) =>
+				fileOf(it[1])
+			);
+			expect(asked.sort(), path).toEqual(await used(page));
+			expect(asked, path).toHaveLength(await loaded(page));
+			expect(asked.length, path).toBeGreaterThan(0);
+		}
+	});
+
+	test('move nothing when they come', async ({ page }) => {
+		await page.setViewportSize({ width: 390, height: 844 });
+		for (const path of ['/', '/sign-in', YARD_PATH]) {
+			if (path === YARD_PATH) await signIn(page, 'owner');
+			await page.goto(path, { waitUntil: 'networkidle' });
+			const moved = await page.evaluate(
+				() =>
+					new Promise<number>((resolve) => {
+						let sum = 0;
+						new PerformanceObserver((list) => {
+							for (const entry of list.getEntries()) {
+								const value: unknown = Reflect.get(entry, 'value');
+								if (typeof value === 'number') sum += value;
+							}
+							resolve(sum);
+						}).observe({ type: 'layout-shift', buffered: true });
+						setTimeout(() => resolve(sum), 500);
+					})
+			);
+			expect(moved, path).toBeLessThan(0.02);
+		}
+	});
+});
+
 test.describe('with less motion asked for', () => {
 	test.use({ viewport: { width: 1440, height: 900 }, contextOptions: { reducedMotion: 'reduce' } });
 
