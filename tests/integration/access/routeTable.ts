@@ -1,0 +1,80 @@
+import type { Role } from '../../../src/lib/server/db/schema';
+
+/**
+ * Who is let in where: every load, action and method of the built route tree. A route that is not
+ * here fails the walk.
+ */
+
+/**
+ * What a handler says to somebody. `asked wrongly` is past the question of who may, too: where the
+ * same request would be refused to another, it is told as refused.
+ */
+export type Answer =
+	'let in' | 'asked wrongly' | 'sign in' | 'not found' | 'not allowed' | 'moved on';
+
+export interface Row {
+	readonly signedOut: Answer;
+	/** On what one belongs to: one's own yard, a boat one may see. */
+	readonly own: Readonly<Record<Role, Answer>>;
+	/** By an address of a yard one does not belong to; null where the address names no yard. */
+	readonly otherYard: Answer | null;
+	/** On a boat of one's yard that only the manager sees; null where the address names no boat's. */
+	readonly otherBoat: Readonly<Record<Role, Answer>> | null;
+	/** What is asked, where an empty request would be refused before anybody looks for whom. */
+	readonly query?: string;
+}
+
+const everyRole = (answer: Answer): Record<Role, Answer> => ({
+	manager: answer,
+	painter: answer,
+	owner: answer
+});
+
+/** Open to everybody, signed in or not. */
+const OPEN: Row = {
+	signedOut: 'let in',
+	own: everyRole('let in'),
+	otherYard: null,
+	otherBoat: null
+};
+/** The same, asked without the fields it needs. */
+const EMPTY_FORM: Row = {
+	...OPEN,
+	signedOut: 'asked wrongly',
+	own: everyRole('asked wrongly')
+};
+/** For everybody of the yard. */
+const OF_YARD: Row = {
+	signedOut: 'sign in',
+	own: everyRole('let in'),
+	otherYard: 'not found',
+	otherBoat: null
+};
+/** About one boat: for who may see it. */
+const OF_BOAT: Row = {
+	...OF_YARD,
+	otherBoat: { manager: 'let in', painter: 'not found', owner: 'not found' }
+};
+
+/** By what the walk calls them: method, `load` or `action <name>`, then the route. */
+export const ROUTES: Readonly<Record<string, Row>> = {
+	'load /(site)/sign-in': { ...OPEN, own: everyRole('moved on') },
+	'action default /(site)/sign-in': EMPTY_FORM,
+	// Leads to sign-in whoever asks: there is nothing to refuse.
+	'POST /(site)/sign-out': { ...OPEN, signedOut: 'sign in', own: everyRole('sign in') },
+	'layout /[yard]': OF_YARD,
+	'load /[yard]': OF_YARD,
+	'GET /api/v1/health': OPEN,
+
+	'GET /api/v1/openapi.json': OPEN,
+	'POST /api/v1/outlook': EMPTY_FORM,
+	'POST /api/v1/yards/[slug]/forecast': OF_YARD,
+	'GET /api/v1/yards/[slug]/hours': OF_YARD,
+	'GET /api/v1/yards/[slug]/steps/[step]/reading': {
+		...OF_BOAT,
+		query: `at=${new Date().toISOString()}`
+	}
+};
+
+/** Pages without server code of their own: nothing to refuse beyond what their layouts do. */
+export const STATIC_PAGES: readonly string[] = ['/(site)'];
