@@ -178,7 +178,9 @@ async function startFakes(children, weather, environment) {
 			FORECAST_CONTACT: 'yard@yardglass.example'
 		});
 	}
+	if (given.SMTP_URL !== undefined) return { addresses, environment: settings };
 	const [smtpPort, pagePort] = [await freePort(), await freePort()];
+	settings.SMTP_URL = `smtp://127.0.0.1:${smtpPort}`;
 	children.start('mail-fake', process.execPath, [
 		...TSX,
 		join(ROOT, 'fakes/mail/server.ts'),

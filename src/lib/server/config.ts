@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { forecastConfigSchema } from './forecast/config';
+import { mailConfigSchema } from './mail/config';
 
 const postgresUrl = z.url({
 	protocol: /^postgres(ql)?$/,
@@ -9,6 +10,7 @@ const postgresUrl = z.url({
 /** Everything this process is told from outside; read once, at its start. */
 export const configSchema = z.object({
 	...forecastConfigSchema.shape,
+	...mailConfigSchema.shape,
 	DATABASE_URL: postgresUrl,
 	/** The address people reach the product at; form posts from elsewhere are refused. */
 	ORIGIN: z.url({ protocol: /^https?$/, error: 'is not an address like https://yard.example' }),

@@ -56,14 +56,46 @@ const OF_BOAT: Row = {
 	otherBoat: { manager: 'let in', painter: 'not found', owner: 'not found' }
 };
 
+/** Behind a link from a mail: who holds none is told that it is over. */
+const LINK_OVER: Row = { ...OPEN, signedOut: 'not found', own: everyRole('not found') };
+/** For whoever is signed in, about themselves. */
+const OWN_ACCOUNT: Row = { ...OPEN, signedOut: 'sign in' };
+/** For managers and owners, who ask people to the yard. */
+const OF_WHO_ASKS: Row = {
+	...OF_YARD,
+	own: { manager: 'let in', painter: 'not allowed', owner: 'let in' }
+};
+
 /** By what the walk calls them: method, `load` or `action <name>`, then the route. */
 export const ROUTES: Readonly<Record<string, Row>> = {
 	'load /(site)/sign-in': { ...OPEN, own: everyRole('moved on') },
 	'action default /(site)/sign-in': EMPTY_FORM,
+	'load /(site)/new': OPEN,
+	'action default /(site)/new': EMPTY_FORM,
+	'load /(site)/found/[token]': OPEN,
+	'action default /(site)/found/[token]': LINK_OVER,
+	'action default /(site)/forgot': EMPTY_FORM,
+	'load /(site)/reset/[token]': OPEN,
+	'action default /(site)/reset/[token]': EMPTY_FORM,
+	'load /(site)/invitation/[token]': OPEN,
+	'action accept /(site)/invitation/[token]': LINK_OVER,
+	'action join /(site)/invitation/[token]': LINK_OVER,
+	'load /(site)/you': OWN_ACCOUNT,
+	'action passphrase /(site)/you': { ...OWN_ACCOUNT, own: everyRole('asked wrongly') },
+	'action endDevice /(site)/you': { ...OWN_ACCOUNT, own: everyRole('moved on') },
 	// Leads to sign-in whoever asks: there is nothing to refuse.
 	'POST /(site)/sign-out': { ...OPEN, signedOut: 'sign in', own: everyRole('sign in') },
 	'layout /[yard]': OF_YARD,
 	'load /[yard]': OF_YARD,
+	'load /[yard]/settings/people': OF_WHO_ASKS,
+	'action invite /[yard]/settings/people': {
+		...OF_WHO_ASKS,
+		own: { manager: 'asked wrongly', painter: 'not allowed', owner: 'asked wrongly' }
+	},
+	'action takeBack /[yard]/settings/people': {
+		...OF_YARD,
+		own: { manager: 'let in', painter: 'not allowed', owner: 'not allowed' }
+	},
 	'GET /api/v1/health': OPEN,
 
 	'GET /api/v1/openapi.json': OPEN,

@@ -105,6 +105,7 @@ const ANSWERS: Readonly<Record<number, Answer>> = {
 	401: 'sign in',
 	403: 'not allowed',
 	404: 'not found',
+	410: 'not found',
 	415: 'asked wrongly'
 };
 function answerOfStatus(status: number): Answer {

@@ -18,13 +18,28 @@ const PERMISSIONS = {
 	/** Open the yard: its hours, weather and what is theirs to see. */
 	see: ['manager', 'painter', 'owner'],
 	/** Ask the forecast provider now instead of at the next hour. */
-	askForecast: ['manager', 'painter', 'owner']
+	askForecast: ['manager', 'painter', 'owner'],
+	/** Ask somebody to the yard; whom, says {@link mayInvite}. */
+	invite: ['manager', 'owner'],
+	/** See everybody of the yard and who was asked, and take an invitation back. */
+	seePeople: ['manager']
 } as const satisfies Record<string, readonly Role[]>;
 export type Permission = keyof typeof PERMISSIONS;
 
 /** Whether a role may do something. */
 export function mayDo(role: Role, permission: Permission): boolean {
 	return PERMISSIONS[permission].some((allowed) => allowed === role);
+}
+
+/**
+ * Why a role may not ask somebody to the yard as another; null where it may. A manager asks
+ * anybody, an owner a painter for a boat of their own.
+ */
+export function mayInvite(role: Role, as: Role, forOwnBoat: boolean): string | null {
+	if (!mayDo(role, 'invite')) return 'Your role in this yard does not allow that.';
+	if (role === 'manager') return null;
+	if (as !== 'painter') return 'An owner asks painters; the yard’s manager asks everybody else.';
+	return forOwnBoat ? null : 'Say for which of your boats the painter is asked.';
 }
 
 /** The signed-in person; answers 401 without one. */

@@ -1,5 +1,6 @@
 import { DrizzlePostgreSQLAdapter } from '@lucia-auth/adapter-drizzle';
 import { createHash } from 'node:crypto';
+import { and, desc, eq, gt } from 'drizzle-orm';
 import { Lucia, TimeSpan, type Adapter, type DatabaseSession } from 'lucia';
 import type { Database } from '../db/client';
 import { sessions, users, type User } from '../db/schema';
@@ -28,7 +29,12 @@ export interface SessionCookie {
 	};
 }
 
+/** A device unheard of for so long signs in again, and every device after so long in any case. */
 const SESSION_DAYS = 30;
+const MOST_DAYS = 90;
+const DAY_MS = 86_400_000;
+/** When a device was last heard of is kept to within minutes. */
+const SEEN_MS = 5 * 60_000;
 
 const hashed = (token: string): string => createHash('sha256').update(token).digest('hex');
 
@@ -51,16 +57,22 @@ function hashingAdapter(inner: Adapter): Adapter {
 }
 
 type Attributes = Omit<SignedInUser, 'id'>;
+interface Device {
+	readonly createdAt: Date;
+	readonly lastSeenAt: Date;
+	readonly userAgent: string | null;
+}
 
 declare module 'lucia' {
 	interface Register {
 		Lucia: ReturnType<typeof createLucia>;
 		DatabaseUserAttributes: Attributes;
+		DatabaseSessionAttributes: Device;
 	}
 }
 
 function createLucia(db: Database, secure: boolean) {
-	return new Lucia<Record<never, never>, Attributes>(
+	return new Lucia<Device, Attributes>(
 		hashingAdapter(new DrizzlePostgreSQLAdapter(db, sessions, users)),
 		{
 			sessionExpiresIn: new TimeSpan(SESSION_DAYS, 'd'),
@@ -68,6 +80,11 @@ function createLucia(db: Database, secure: boolean) {
 				name: 'yardglass-session',
 				attributes: { secure, sameSite: 'lax', path: '/' }
 			},
+			getSessionAttributes: ({ createdAt, lastSeenAt, userAgent }) => ({
+				createdAt,
+				lastSeenAt,
+				userAgent
+			}),
 			getUserAttributes: ({ email, name, windUnit, temperatureUnit }) => ({
 				email,
 				name,
@@ -91,8 +108,13 @@ export function createSessions(db: Database, { secure }: { secure: boolean }) {
 	return {
 		cookieName: lucia.sessionCookieName,
 		/** Signs a user in; the cookie carries the only copy of the token. */
-		async create(userId: string): Promise<SessionCookie> {
-			const session = await lucia.createSession(userId, {});
+		async create(userId: string, userAgent: string | null = null): Promise<SessionCookie> {
+			const now = new Date();
+			const session = await lucia.createSession(userId, {
+				createdAt: now,
+				lastSeenAt: now,
+				userAgent: userAgent?.slice(0, 400) ?? null
+			});
 			return cookie(session.id, SESSION_DAYS * 86_400);
 		},
 		/**
@@ -107,11 +129,40 @@ export function createSessions(db: Database, { secure }: { secure: boolean }) {
 		> {
 			const { user, session } = await lucia.validateSession(token);
 			if (user === null) return { user: null, session: null, renewed: null };
+			const now = Date.now();
+			if (now - session.createdAt.getTime() > MOST_DAYS * DAY_MS) {
+				await lucia.invalidateSession(token);
+				return { user: null, session: null, renewed: null };
+			}
+			if (now - session.lastSeenAt.getTime() > SEEN_MS)
+				await db
+					.update(sessions)
+					.set({ lastSeenAt: new Date(now) })
+					.where(eq(sessions.id, hashed(token)));
 			return {
 				user,
 				session: { id: session.id, expiresAt: session.expiresAt },
 				renewed: session.fresh ? cookie(session.id, SESSION_DAYS * 86_400) : null
 			};
+		},
+		/** The devices a person is signed in on, the last heard of first; `token` marks this one. */
+		async devicesOf(userId: string, token: string | null) {
+			const rows = await db
+				.select({
+					id: sessions.id,
+					createdAt: sessions.createdAt,
+					lastSeenAt: sessions.lastSeenAt,
+					userAgent: sessions.userAgent
+				})
+				.from(sessions)
+				.where(and(eq(sessions.userId, userId), gt(sessions.expiresAt, new Date())))
+				.orderBy(desc(sessions.lastSeenAt));
+			const own = token === null ? null : hashed(token);
+			return rows.map((row) => ({ ...row, isThis: row.id === own }));
+		},
+		/** Ends one of a person's sessions by the id that their list shows. */
+		async endDevice(userId: string, id: string): Promise<void> {
+			await db.delete(sessions).where(and(eq(sessions.userId, userId), eq(sessions.id, id)));
 		},
 		end: (token: string): Promise<void> => lucia.invalidateSession(token),
 		endAllOf: (userId: string): Promise<void> => lucia.invalidateUserSessions(userId),

@@ -1,11 +1,13 @@
 import type { JobHelpers, TaskList } from 'graphile-worker';
 import { z } from 'zod';
+import { forgetOldLinks } from '../access/links';
 import type { Composition } from '../composition';
 import { forgetHoursBefore } from '../db/outlookCache';
 import { allBoatsOf, queuedSteps } from '../db/queue';
 import { allYards, yardById } from '../db/yards';
 import { currentForecast } from '../forecast/current';
 import { refreshForecast } from '../forecast/refresh';
+import { deliverDue, smtpSender } from '../mail/deliver';
 import { computeOutlook } from '../outlook/compute';
 import { refreshOffsetSeconds } from './spread';
 
@@ -31,6 +33,7 @@ export async function addRefresh(
 
 /** The worker's tasks by name. */
 export function createTasks({ db, config, log, sessions }: Parts): TaskList {
+	const send = smtpSender(config);
 	return {
 		/** Hourly: lays each yard's refresh at its own minute of the hour. */
 		async spreadRefreshes(_, { addJob }) {
@@ -61,10 +64,17 @@ export function createTasks({ db, config, log, sessions }: Parts): TaskList {
 			await computeOutlook(db, yard, queue, await currentForecast(db, yard, now), now);
 			log.info({ yardId, steps: queue.length }, 'outlook computed');
 		},
+		/** Every minute, and when a letter is posted: sends what is due. */
+		async deliverMail() {
+			if (send === null) return;
+			const { sent, failed } = await deliverDue(db, send);
+			if (sent + failed > 0) log.info({ sent, failed }, 'mail delivered');
+		},
 		/** Daily: forgets what can be computed again and sessions that have ended. */
 		async sweep() {
 			await forgetHoursBefore(db, new Date(Date.now() - KEEP_HOURS_MS));
 			await sessions.deleteExpired();
+			await forgetOldLinks(db);
 		}
 	};
 }

@@ -30,6 +30,7 @@ const runner = await run({
 	taskList: createTasks(parts),
 	parsedCronItems: parseCronItems([
 		{ task: 'spreadRefreshes', match: '0 * * * *' },
+		{ task: 'deliverMail', match: '* * * * *' },
 		{ task: 'sweep', match: '17 3 * * *' }
 	])
 });

@@ -7,7 +7,7 @@ import type { Actions, PageServerLoad } from './$types';
 /** Where a person lands: their yard, or the front page while they belong to none. */
 async function homeOf(userId: string): Promise<string> {
 	const [yard] = await yardsOf(parts().db, userId);
-	return yard === undefined ? '/' : `/${yard.slug}`;
+	return yard === undefined ? '/you' : `/${yard.slug}`;
 }
 
 export const load: PageServerLoad = async ({ locals }) => {
@@ -33,7 +33,7 @@ export const actions: Actions = {
 			case 'refused':
 				return fail(400, { email, message: 'That e-mail and passphrase do not go together.' });
 			case 'signedIn': {
-				const cookie = await sessions.create(result.userId);
+				const cookie = await sessions.create(result.userId, request.headers.get('user-agent'));
 				cookies.set(cookie.name, cookie.value, cookie.attributes);
 				redirect(303, await homeOf(result.userId));
 			}

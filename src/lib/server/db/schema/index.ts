@@ -1,3 +1,4 @@
+export * from './accounts';
 export * from './people';
 export * from './yard';
 export * from './boats';

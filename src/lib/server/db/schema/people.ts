@@ -29,7 +29,10 @@ export const sessions = pgTable('sessions', {
 		.notNull()
 		.references(() => users.id, { onDelete: 'cascade' }),
 	expiresAt: timestamp({ withTimezone: true }).notNull(),
-	createdAt: timestamp({ withTimezone: true }).notNull().defaultNow()
+	createdAt: timestamp({ withTimezone: true }).notNull().defaultNow(),
+	/** When the device was last heard of, within minutes, and what it called itself. */
+	lastSeenAt: timestamp({ withTimezone: true }).notNull().defaultNow(),
+	userAgent: text()
 });
 
 /** Failed sign-ins, for the rate limit; `key` is a hash of address or e-mail. */

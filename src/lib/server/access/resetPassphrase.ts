@@ -1,0 +1,69 @@
+import { eq, sql } from 'drizzle-orm';
+import type { Database } from '../db/client';
+import { users } from '../db/schema';
+import { resetLetter } from '../mail/letters';
+import { post } from '../mail/outbox';
+import { createLink, followLink } from './links';
+import { hashPassword, verifyPassword } from './passwords';
+import type { Sessions } from './sessions';
+
+const LINK_HOURS = 2;
+
+/** Mails a link for a new passphrase, where the address has an account; tells nobody whether it has. */
+export async function askToReset(db: Database, email: string, origin: string): Promise<void> {
+	await db.transaction(async (tx) => {
+		const [user] = await tx
+			.select({ id: users.id, email: users.email })
+			.from(users)
+			.where(sql`lower(${users.email}) = ${email}`);
+		if (user === undefined) return;
+		const token = await createLink(tx, {
+			kind: 'resetPassphrase',
+			userId: user.id,
+			hours: LINK_HOURS
+		});
+		await post(tx, resetLetter(user.email, `${origin}/reset/${token}`));
+	});
+}
+
+/**
+ * Sets a new passphrase by a mailed link and ends every session of the person, whoever held them.
+ *
+ * @returns the person, or null where the link is over
+ */
+export async function resetPassphrase(
+	db: Database,
+	sessions: Sessions,
+	token: string,
+	passphrase: string
+): Promise<string | null> {
+	const passwordHash = await hashPassword(passphrase);
+	const userId = await db.transaction(async (tx) => {
+		const link = await followLink(tx, token, 'resetPassphrase');
+		if (link?.userId == null) return null;
+		await tx.update(users).set({ passwordHash }).where(eq(users.id, link.userId));
+		return link.userId;
+	});
+	if (userId !== null) await sessions.endAllOf(userId);
+	return userId;
+}
+
+/** Changes a passphrase that is known; false where it is not the one given. Ends every session. */
+export async function changePassphrase(
+	db: Database,
+	sessions: Sessions,
+	userId: string,
+	given: { readonly current: string; readonly next: string }
+): Promise<boolean> {
+	const [user] = await db
+		.select({ passwordHash: users.passwordHash })
+		.from(users)
+		.where(eq(users.id, userId));
+	if (!(await verifyPassword(user?.passwordHash ?? null, given.current))) return false;
+	await db
+		.update(users)
+		.set({ passwordHash: await hashPassword(given.next) })
+		.where(eq(users.id, userId));
+	await sessions.endAllOf(userId);
+	return true;
+}

@@ -1,0 +1,29 @@
+import { fail } from '@sveltejs/kit';
+import { z } from 'zod';
+import { founderSchema } from '$lib/server/access/foundYard';
+import { askToReset } from '$lib/server/access/resetPassphrase';
+import { parts } from '$lib/server/composition';
+import { readForm } from '$lib/server/http/form';
+import { mailPause } from '$lib/server/http/mailLimit';
+import type { Actions } from './$types';
+
+const forgotForm = z.object({ email: founderSchema.shape.email });
+
+export const actions: Actions = {
+	default: async ({ request, getClientAddress }) => {
+		const { db, config } = parts();
+		const read = await readForm(request, forgotForm);
+		if (read.trouble !== null) return fail(400, { ...read.trouble, message: '', sentTo: null });
+		const { email } = read.data;
+		const minutes = await mailPause(getClientAddress(), email);
+		if (minutes !== null)
+			return fail(429, {
+				values: read.values,
+				errors: {},
+				message: `Too many letters from here. Wait ${minutes} minutes, then try again.`,
+				sentTo: null
+			});
+		await askToReset(db, email, config.ORIGIN);
+		return { values: read.values, errors: {}, message: '', sentTo: email };
+	}
+};

@@ -1,0 +1,70 @@
+import { fail, redirect } from '@sveltejs/kit';
+import { z } from 'zod';
+import { timeZoneAt } from '$lib/server/access/timeZone';
+import {
+	askToFound,
+	createYard,
+	founderSchema,
+	yardPlaceSchema
+} from '$lib/server/access/foundYard';
+import { passphraseSchema, passphraseWeakness } from '$lib/server/access/strength';
+import { parts } from '$lib/server/composition';
+import { readForm, typedNumber } from '$lib/server/http/form';
+import { mailPause } from '$lib/server/http/mailLimit';
+import type { Actions, PageServerLoad } from './$types';
+
+const placeForm = z.object({
+	yard: yardPlaceSchema.shape.name,
+	latitude: typedNumber(-90, 90, 'Type degrees from −90 to 90, south negative, like 37.02.'),
+	longitude: typedNumber(-180, 180, 'Type degrees from −180 to 180, west negative, like −7.86.'),
+	elevation: typedNumber(-450, 6000, 'Type metres above the sea, like 3.')
+});
+const newcomerForm = placeForm.extend({
+	name: founderSchema.shape.name,
+	email: founderSchema.shape.email,
+	passphrase: passphraseSchema
+});
+
+const placeOf = ({ yard, ...it }: z.infer<typeof placeForm>) => ({
+	...it,
+	name: yard,
+	timeZone: timeZoneAt(it.latitude, it.longitude)
+});
+
+export const load: PageServerLoad = ({ locals }) => ({
+	person: locals.user === null ? null : locals.user.name
+});
+
+export const actions: Actions = {
+	default: async ({ request, locals, getClientAddress }) => {
+		const { db, config } = parts();
+		const { user } = locals;
+		if (user !== null) {
+			const { data, trouble } = await readForm(request, placeForm);
+			if (trouble !== null) return fail(400, { ...trouble, message: '', sentTo: null });
+			const slug = await db.transaction((tx) => createYard(tx, placeOf(data), user.id));
+			redirect(303, `/${slug}`);
+		}
+		const read = await readForm(request, newcomerForm);
+		if (read.trouble !== null) return fail(400, { ...read.trouble, message: '', sentTo: null });
+		const { data, values } = read;
+		const weakness = passphraseWeakness(data.passphrase, [data.name, data.email, data.yard]);
+		if (weakness !== null)
+			return fail(400, { values, errors: { passphrase: weakness }, message: '', sentTo: null });
+		const minutes = await mailPause(getClientAddress(), data.email);
+		if (minutes !== null)
+			return fail(429, {
+				values,
+				errors: {},
+				message: `Too many letters from here. Wait ${minutes} minutes, then try again.`,
+				sentTo: null
+			});
+		await askToFound(db, {
+			place: placeOf(data),
+			founder: { name: data.name, email: data.email },
+			passphrase: data.passphrase,
+			origin: config.ORIGIN
+		});
+		return { values, errors: {}, message: '', sentTo: data.email };
+	}
+};

@@ -1,0 +1,53 @@
+import { fail, redirect } from '@sveltejs/kit';
+import { z } from 'zod';
+import { yardsOf } from '$lib/server/access/roles';
+import { changePassphrase } from '$lib/server/access/resetPassphrase';
+import { passphraseSchema, passphraseWeakness } from '$lib/server/access/strength';
+import { parts } from '$lib/server/composition';
+import { readForm } from '$lib/server/http/form';
+import type { Actions, PageServerLoad } from './$types';
+
+const changeForm = z.object({
+	currentPassphrase: z.string().min(1, 'Type the passphrase you have now.'),
+	passphrase: passphraseSchema
+});
+
+export const load: PageServerLoad = async ({ locals }) => {
+	const { user, session } = locals;
+	if (user === null) redirect(303, '/sign-in');
+	const { db, sessions } = parts();
+	return {
+		person: { name: user.name, email: user.email },
+		yards: (await yardsOf(db, user.id)).map(({ slug, name, role }) => ({ slug, name, role })),
+		devices: await sessions.devicesOf(user.id, session?.id ?? null)
+	};
+};
+
+export const actions: Actions = {
+	passphrase: async ({ locals, request, cookies }) => {
+		const { user } = locals;
+		if (user === null) redirect(303, '/sign-in');
+		const { db, sessions } = parts();
+		const userAgent = request.headers.get('user-agent');
+		const { data, trouble } = await readForm(request, changeForm);
+		if (trouble !== null) return fail(400, { errors: trouble.errors, changed: false });
+		const weakness = passphraseWeakness(data.passphrase, [user.name, user.email]);
+		if (weakness !== null) return fail(400, { errors: { passphrase: weakness }, changed: false });
+		const given = { current: data.currentPassphrase, next: data.passphrase };
+		if (!(await changePassphrase(db, sessions, user.id, given)))
+			return fail(400, {
+				errors: { currentPassphrase: 'That is not the passphrase you have now.' },
+				changed: false
+			});
+		// All devices were signed out: this one comes back under a new token.
+		const cookie = await sessions.create(user.id, userAgent);
+		cookies.set(cookie.name, cookie.value, cookie.attributes);
+		return { errors: {}, changed: true };
+	},
+	endDevice: async ({ locals, request }) => {
+		if (locals.user === null) redirect(303, '/sign-in');
+		const form = await request.formData();
+		await parts().sessions.endDevice(locals.user.id, String(form.get('device') ?? ''));
+		redirect(303, '/you');
+	}
+};
