@@ -101,7 +101,8 @@ async function main() {
 					STACK_DATABASE_URL: stack.databaseUrl,
 					PLAYWRIGHT_JSON_OUTPUT_NAME: browserReport,
 					PLAYWRIGHT_OUTPUT: join(dataFolder, 'browser-output'),
-					DEMO_ACCOUNTS: JSON.stringify(stack.accounts)
+					DEMO_ACCOUNTS: JSON.stringify(stack.accounts),
+					MAIL_URL: stack.fakes.mail ?? ''
 				}
 			)
 		);
