@@ -6,6 +6,7 @@ import type {
 	StepKind,
 	TaskCode
 } from '../../src/lib/engine';
+import type { Colour } from '../../src/lib/server/boats/hulls';
 import type { FaceRow } from '../../src/lib/server/db/schema';
 
 /** The demo yard: invented place, people, boats and jobs. */
@@ -38,16 +39,6 @@ export const DEMO_PEOPLE = {
 		password: 'chocks-under-the-keel'
 	}
 } as const;
-
-type Colour = 'white' | 'light' | 'mid' | 'dark' | 'bareAluminium';
-/** Solar absorptance and emissivity of the present coat (defaults, no source). */
-export const COLOURS: Record<Colour, Pick<FaceRow, 'solarAbsorptance' | 'emissivity'>> = {
-	white: { solarAbsorptance: 0.25, emissivity: 0.9 },
-	light: { solarAbsorptance: 0.4, emissivity: 0.9 },
-	mid: { solarAbsorptance: 0.6, emissivity: 0.9 },
-	dark: { solarAbsorptance: 0.9, emissivity: 0.9 },
-	bareAluminium: { solarAbsorptance: 0.4, emissivity: 0.15 }
-};
 
 export interface DemoFace {
 	name: FaceRow['name'];

@@ -1,5 +1,5 @@
 import { eq } from 'drizzle-orm';
-import { FACE_ORIENTATIONS, localDate, SAMPLE_SHEETS } from '../../src/lib/engine';
+import { FACE_ORIENTATIONS, localDate } from '../../src/lib/engine';
 import { hashPassword } from '../../src/lib/server/access/passwords';
 import type { Database } from '../../src/lib/server/db/client';
 import {
@@ -8,7 +8,6 @@ import {
 	faces,
 	jobs,
 	memberships,
-	sheets,
 	stands,
 	stepFaces,
 	steps,
@@ -16,8 +15,10 @@ import {
 	yards,
 	type Role
 } from '../../src/lib/server/db/schema';
-import { COLOURS, DEMO_BOATS, DEMO_PEOPLE, DEMO_YARD, type DemoBoat } from './demo';
-import { demoStepRules } from './stepRules';
+import { COLOURS } from '../../src/lib/server/boats/hulls';
+import { DEMO_BOATS, DEMO_PEOPLE, DEMO_YARD, type DemoBoat } from './demo';
+import { laySamples } from '../../src/lib/server/jobs/samples';
+import { stepRules } from '../../src/lib/server/jobs/stepRules';
 
 type Transaction = Parameters<Parameters<Database['transaction']>[0]>[0];
 const ROLE_NAMES = Object.keys(DEMO_PEOPLE) as (keyof typeof DEMO_PEOPLE & Role)[];
@@ -109,7 +110,7 @@ async function insertBoat(
 						method: step.method,
 						durationMinutes: step.hours * 60,
 						sheetId: step.sheet === undefined ? null : (sheetIds.get(step.sheet) ?? null),
-						...demoStepRules(job.steps, order),
+						...stepRules(job.steps, order),
 						shelter: step.shelter ?? 'open',
 						updatedAt: now
 					})
@@ -133,23 +134,7 @@ async function insertYard(tx: Transaction, now: Date, today: string): Promise<vo
 	await tx
 		.insert(memberships)
 		.values([...people].map(([role, userId]) => ({ yardId, userId, role })));
-	const sheetIds = new Map<string, string>();
-	for (const [key, sheet] of Object.entries(SAMPLE_SHEETS)) {
-		const row = first(
-			await tx
-				.insert(sheets)
-				.values({
-					yardId,
-					name: sheet.name,
-					sample: true,
-					limits: sheet.limits,
-					times: sheet.times,
-					hazards: sheet.hazards
-				})
-				.returning({ id: sheets.id })
-		);
-		sheetIds.set(key, row.id);
-	}
+	const sheetIds = await laySamples(tx, yardId);
 	for (const [position, boat] of DEMO_BOATS.entries()) {
 		const { id: standId } = first(
 			await tx

@@ -56,6 +56,12 @@ const OF_BOAT: Row = {
 	otherBoat: { manager: 'let in', painter: 'not found', owner: 'not found' }
 };
 
+/** The same, asked without what it needs. */
+const BOAT_ASKED_WRONGLY: Row = {
+	...OF_BOAT,
+	own: everyRole('asked wrongly'),
+	otherBoat: { manager: 'asked wrongly', painter: 'not found', owner: 'not found' }
+};
 /** Behind a link from a mail: who holds none is told that it is over. */
 const LINK_OVER: Row = { ...OPEN, signedOut: 'not found', own: everyRole('not found') };
 /** For whoever is signed in, about themselves. */
@@ -87,6 +93,14 @@ export const ROUTES: Readonly<Record<string, Row>> = {
 	'POST /(site)/sign-out': { ...OPEN, signedOut: 'sign in', own: everyRole('sign in') },
 	'layout /[yard]': OF_YARD,
 	'load /[yard]': OF_YARD,
+	'load /[yard]/boats': OF_YARD,
+	'action default /[yard]/boats': {
+		...OF_YARD,
+		own: { manager: 'asked wrongly', painter: 'not allowed', owner: 'asked wrongly' }
+	},
+	'load /[yard]/boats/[boat]': OF_BOAT,
+	'action queue /[yard]/boats/[boat]': BOAT_ASKED_WRONGLY,
+	'action drop /[yard]/boats/[boat]': BOAT_ASKED_WRONGLY,
 	'load /[yard]/settings/people': OF_WHO_ASKS,
 	'action invite /[yard]/settings/people': {
 		...OF_WHO_ASKS,

@@ -41,7 +41,13 @@ afterAll(async () => {
 });
 
 /** Names both of them in an address: `yard` on a page, `slug` in the API. */
-const at = (slug: string, step: string) => ({ yard: slug, slug, step, token: 'x'.repeat(32) });
+const at = (slug: string, step: string) => ({
+	yard: slug,
+	slug,
+	step,
+	boat: yards.boatOf.get(step) ?? '',
+	token: 'x'.repeat(32)
+});
 
 test('every load, action and method is in the table, and the table holds no other', () => {
 	expect(DOORS.map(({ name }) => name).sort()).toEqual(Object.keys(ROUTES).sort());
@@ -52,7 +58,7 @@ test('a row says something of another yard where its address names one, and of a
 	for (const door of DOORS) {
 		const { otherYard, otherBoat } = rowOf(door);
 		expect(otherYard !== null, door.name).toBe(/\[(yard|slug)\]/.test(door.route));
-		expect(otherBoat !== null, door.name).toBe(door.route.includes('[step]'));
+		expect(otherBoat !== null, door.name).toBe(/\[(step|boat)\]/.test(door.route));
 	}
 });
 

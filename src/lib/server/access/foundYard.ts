@@ -3,6 +3,7 @@ import { z } from 'zod';
 import { siteSchema } from '../../engine';
 import type { Database } from '../db/client';
 import { memberships, users, yards } from '../db/schema';
+import { laySamples } from '../jobs/samples';
 import { foundLetter, knownLetter } from '../mail/letters';
 import { post, type Writer } from '../mail/outbox';
 import { createLink, followLink } from './links';
@@ -89,6 +90,7 @@ export async function createYard(db: Writer, place: YardPlace, managerId: string
 		.values({ ...place, slug, workHours: FIRST_HOURS })
 		.returning({ id: yards.id });
 	await db.insert(memberships).values({ yardId: id, userId: managerId, role: 'manager' });
+	await laySamples(db, id);
 	return slug;
 }
 

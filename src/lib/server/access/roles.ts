@@ -21,6 +21,10 @@ const PERMISSIONS = {
 	askForecast: ['manager', 'painter', 'owner'],
 	/** Ask somebody to the yard; whom, says {@link mayInvite}. */
 	invite: ['manager', 'owner'],
+	/** Add a boat: a manager anybody's, an owner their own. */
+	addBoat: ['manager', 'owner'],
+	/** Queue and drop work on a boat that one may see. */
+	queueWork: ['manager', 'owner', 'painter'],
 	/** See everybody of the yard and who was asked, and take an invitation back. */
 	seePeople: ['manager']
 } as const satisfies Record<string, readonly Role[]>;

@@ -1,7 +1,7 @@
 import { describe, expect, test } from 'vitest';
-import { DEMO_BOATS, type DemoStep } from '../../../drizzle/seed/demo';
-import { demoStepRules } from '../../../drizzle/seed/stepRules';
-import { limitsSchema, SAMPLE_SHEETS, taskOf, timesSchema } from '../../../src/lib/engine';
+import { DEMO_BOATS, type DemoStep } from '../../../../drizzle/seed/demo';
+import { limitsSchema, SAMPLE_SHEETS, taskOf, timesSchema } from '../../../../src/lib/engine';
+import { stepRules } from '../../../../src/lib/server/jobs/stepRules';
 
 const stepOf = (change: Partial<DemoStep>): DemoStep => ({
 	name: 'coat',
@@ -12,9 +12,9 @@ const stepOf = (change: Partial<DemoStep>): DemoStep => ({
 	...change
 });
 
-describe('demoStepRules', () => {
+describe('stepRules', () => {
 	test('a coat has the wind of its method and nothing else of its sheet', () => {
-		expect(demoStepRules([stepOf({ sheet: 'epoxyPrimer' })], 0)).toEqual({
+		expect(stepRules([stepOf({ sheet: 'epoxyPrimer' })], 0)).toEqual({
 			limits: { wind: { max: 9 }, gust: { max: 12 } },
 			times: {}
 		});
@@ -27,21 +27,21 @@ describe('demoStepRules', () => {
 			stepOf({ sheet: 'erodingAntifouling' })
 		];
 		const pair = SAMPLE_SHEETS.epoxyBarrier.following?.erodingAntifouling;
-		expect(demoStepRules(steps, 0).times).toEqual({
+		expect(stepRules(steps, 0).times).toEqual({
 			overcoatMin: pair?.overcoatMin,
 			overcoatMax: pair?.overcoatMax
 		});
-		expect(demoStepRules(steps, 2).times).toEqual({});
+		expect(stepRules(steps, 2).times).toEqual({});
 	});
 
 	test('toward a coat that its sheet names no pair for, the sheet’s own window is left', () => {
 		const steps = [stepOf({ sheet: 'varnish' }), stepOf({ sheet: 'varnish' })];
-		expect(demoStepRules(steps, 0).times).toEqual({});
+		expect(stepRules(steps, 0).times).toEqual({});
 	});
 
 	test('work without a sheet has the rule of its task, its own limits over it', () => {
 		const step = stepOf({ kind: 'wash', task: 'pressureWash', limits: { daylight: false } });
-		expect(demoStepRules([step], 0).limits).toEqual({
+		expect(stepRules([step], 0).limits).toEqual({
 			...taskOf('pressureWash')?.limits,
 			daylight: false
 		});
@@ -51,7 +51,7 @@ describe('demoStepRules', () => {
 		for (const boat of DEMO_BOATS)
 			for (const { steps } of boat.jobs)
 				steps.forEach((step, order) => {
-					const { limits, times } = demoStepRules(steps, order);
+					const { limits, times } = stepRules(steps, order);
 					expect(limitsSchema.safeParse(limits).error).toBeUndefined();
 					expect(timesSchema.safeParse(times).error).toBeUndefined();
 					expect(step.sheet ?? step.task).toBeDefined();

@@ -4,12 +4,27 @@ import {
 	taskOf,
 	timesBefore,
 	type Limits,
+	type Method,
+	type SampleName,
+	type TaskCode,
 	type Times
-} from '../../src/lib/engine';
-import type { DemoStep } from './demo';
+} from '../../engine';
+
+/** A step as a queue is written down before it is laid: its sample sheet or rule, and on which faces. */
+export interface WrittenStep<Face> {
+	readonly method: Method;
+	readonly faces: readonly Face[];
+	readonly sheet?: SampleName;
+	/** The rule of work without a sheet. */
+	readonly task?: TaskCode;
+	readonly limits?: Limits;
+}
 
 /** The coat that a step's own is next covered by; null where none follows on one of its faces. */
-function nextCoatOf(steps: readonly DemoStep[], order: number): DemoStep | null {
+function nextCoatOf<Face>(
+	steps: readonly WrittenStep<Face>[],
+	order: number
+): WrittenStep<Face> | null {
 	const { faces } = steps[order];
 	const next = steps
 		.slice(order + 1)
@@ -18,11 +33,11 @@ function nextCoatOf(steps: readonly DemoStep[], order: number): DemoStep | null 
 }
 
 /**
- * Limits and times that a demo step has beside its sheet's: the most wind of its method, the
+ * Limits and times that a step has beside its sheet's: the most wind of its method, the
  * overcoat times toward the very coat that follows, the rule of work without a sheet.
  */
-export function demoStepRules(
-	steps: readonly DemoStep[],
+export function stepRules<Face>(
+	steps: readonly WrittenStep<Face>[],
 	order: number
 ): { limits: Limits; times: Times } {
 	const step = steps[order];

@@ -1,0 +1,141 @@
+import { eq } from 'drizzle-orm';
+import { afterAll, beforeAll, describe, expect, test } from 'vitest';
+import { requireMembership, type Membership } from '../../../src/lib/server/access/roles';
+import { addBoat, boatOf, boatsOf, type NewBoat } from '../../../src/lib/server/boats/boats';
+import { queuedSteps } from '../../../src/lib/server/db/queue';
+import { boats, faces, jobs, stands, steps } from '../../../src/lib/server/db/schema';
+import { dropStep, jobsOfBoat, queueJob } from '../../../src/lib/server/jobs/queueJob';
+import { JOB_TEMPLATES } from '../../../src/lib/server/jobs/templates';
+import { layTwoYards, type TwoYards } from '../../fixtures/twoYards';
+import { createTestDatabase } from '../../setup/database';
+
+let database: Awaited<ReturnType<typeof createTestDatabase>>;
+let two: TwoYards;
+const as = (role: 'manager' | 'painter' | 'owner'): Promise<Membership> =>
+	requireMembership(database.db, { user: two.people[role] }, two.own.slug);
+
+beforeAll(async () => {
+	database = await createTestDatabase();
+	two = await layTwoYards(database.db);
+});
+afterAll(() => database.drop());
+
+const BOAT: NewBoat = {
+	name: 'Dunlin',
+	stand: '31',
+	heading: 40,
+	hull: 'steel',
+	colour: 'white',
+	ownerId: null
+};
+
+describe('adding a boat', () => {
+	test('gives it the usual faces of its build, on a stand that is made where it is new', async () => {
+		const manager = await as('manager');
+		const id = await addBoat(database.db, manager, { ...BOAT, ownerId: two.people.owner.id });
+		const boat = await boatOf(database.db, manager, id ?? '');
+		expect(boat).toMatchObject({ name: 'Dunlin', heading: 40, stand: '31' });
+		expect(boat?.faces).toHaveLength(11);
+		const bottom = boat?.faces.find(({ name, side }) => name === 'bottom' && side === 'port');
+		expect(bottom).toMatchObject({ material: 'steel', bearing: 270, solarAbsorptance: 0.9 });
+		await addBoat(database.db, manager, { ...BOAT, name: 'Knot' });
+		const rows = await database.db.select().from(stands).where(eq(stands.name, '31'));
+		expect(rows).toHaveLength(1);
+	});
+
+	test('an owner’s is their own, and a manager names only owners of the yard', async () => {
+		const owner = await as('owner');
+		const id = await addBoat(database.db, owner, {
+			...BOAT,
+			name: 'Whimbrel',
+			stand: '',
+			ownerId: two.people.painter.id
+		});
+		const [row] = await database.db
+			.select()
+			.from(boats)
+			.where(eq(boats.id, id ?? ''));
+		expect(row).toMatchObject({ ownerId: two.people.owner.id, standId: null });
+		const manager = await as('manager');
+		for (const stranger of [two.people.painter.id, two.other.manager.id])
+			expect(await addBoat(database.db, manager, { ...BOAT, ownerId: stranger })).toBeNull();
+	});
+
+	test('an owner’s list has their own, a painter’s those assigned, a manager’s all', async () => {
+		const names = async (role: 'manager' | 'painter' | 'owner') =>
+			(await boatsOf(database.db, await as(role))).map(({ name }) => name);
+		const [all, mine, theirs] = [
+			await names('manager'),
+			await names('owner'),
+			await names('painter')
+		];
+		expect(mine).toContain('Whimbrel');
+		expect(theirs).not.toContain('Whimbrel');
+		expect(all).toEqual(expect.arrayContaining([...mine, ...theirs, 'Knot']));
+		expect(all).not.toContain('Sandpiper');
+		expect(mine.length).toBeLessThan(all.length);
+	});
+});
+
+describe('queueing a usual job', () => {
+	test.each(JOB_TEMPLATES.map(({ code, steps: of }) => [code, of.length] as const))(
+		'%s lays its steps in order, each with its faces and its sheet or rule',
+		async (code, length) => {
+			const manager = await as('manager');
+			const id = (await addBoat(database.db, manager, { ...BOAT, name: code, stand: '' })) ?? '';
+			expect((await queueJob(database.db, manager, id, code)).outcome).toBe('queued');
+			const queue = await queuedSteps(database.db, eq(boats.id, id));
+			expect(queue).toHaveLength(length);
+			for (const { step, sheet, faces: worked } of queue) {
+				expect(worked.length).toBeGreaterThan(0);
+				if (step.kind === 'coat') expect(sheet?.sample).toBe(true);
+				else expect(sheet).toBeNull();
+			}
+		}
+	);
+
+	test('goes behind what is queued already', async () => {
+		const manager = await as('manager');
+		const id = (await addBoat(database.db, manager, { ...BOAT, name: 'Godwit', stand: '' })) ?? '';
+		await queueJob(database.db, manager, id, 'barrierCoat');
+		await queueJob(database.db, manager, id, 'varnish');
+		const rows = await database.db
+			.select({ name: jobs.name })
+			.from(jobs)
+			.where(eq(jobs.boatId, id))
+			.orderBy(jobs.position);
+		expect(rows.map(({ name }) => name)).toEqual(['New barrier coat', 'Varnish']);
+	});
+
+	test('is refused on a boat without the faces, an unknown job, and another’s boat', async () => {
+		const manager = await as('manager');
+		const id = (await addBoat(database.db, manager, { ...BOAT, name: 'Ruff', stand: '' })) ?? '';
+		await database.db.delete(faces).where(eq(faces.boatId, id));
+		const why = async (membership: Membership, boat: string, code: string) => {
+			const result = await queueJob(database.db, membership, boat, code);
+			return result.outcome === 'refused' ? result.why : '';
+		};
+		expect(await why(manager, id, 'varnish')).toContain('none of the faces');
+		expect(await why(manager, id, 'gilding')).toContain('no such usual job');
+		const foreign = two.boatOf.get(two.own.stepOfAnother) ?? '';
+		expect(await why(await as('owner'), foreign, 'varnish')).toContain('not yours to see');
+		const strange = two.boatOf.get(two.other.step) ?? '';
+		expect(await why(manager, strange, 'antifoulSeason')).toContain('not yours to see');
+		expect(await jobsOfBoat(database.db, id)).toEqual([]);
+	});
+});
+
+describe('dropping a step', () => {
+	test('takes it off the queue once, and only off its own boat', async () => {
+		const manager = await as('manager');
+		const id = (await addBoat(database.db, manager, { ...BOAT, name: 'Stint', stand: '' })) ?? '';
+		await queueJob(database.db, manager, id, 'varnish');
+		const [{ stepId }] = await jobsOfBoat(database.db, id);
+		expect(await dropStep(database.db, two.boatOf.get(two.own.step) ?? '', stepId)).toBe(false);
+		expect(await dropStep(database.db, id, stepId)).toBe(true);
+		expect(await dropStep(database.db, id, stepId)).toBe(false);
+		const [row] = await database.db.select().from(steps).where(eq(steps.id, stepId));
+		expect(row.state).toBe('dropped');
+		expect(await queuedSteps(database.db, eq(boats.id, id))).toHaveLength(3);
+	});
+});
