@@ -1,11 +1,29 @@
 import { sveltekit } from '@sveltejs/kit/vite';
 import tailwindcss from '@tailwindcss/vite';
+import type { Plugin } from 'vite';
 import { defineConfig } from 'vitest/config';
 
 const outsideChecks = ['tests/setup/network.ts'];
 
+/**
+ * Faces that come after the page is drawn wait for the next page: swapped in late they would move
+ * what is being read. They are preloaded, so that this is rare.
+ */
+const steadyFaces: Plugin = {
+	name: 'steady-faces',
+	generateBundle(_, bundle) {
+		for (const file of Object.values(bundle)) {
+			if (file.type !== 'asset' || !file.fileName.endsWith('.css')) continue;
+			file.source = String(file.source).replaceAll(
+				/font-display:\s*swap/g,
+				'font-display:optional'
+			);
+		}
+	}
+};
+
 export default defineConfig({
-	plugins: [tailwindcss(), sveltekit()],
+	plugins: [tailwindcss(), sveltekit(), steadyFaces],
 	build: {
 		// Fonts must stay files: the page's policy allows fonts from its own origin only.
 		assetsInlineLimit: (file) => (/\.(woff2?|ttf)$/.test(file) ? false : undefined)
