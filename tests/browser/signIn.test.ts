@@ -13,6 +13,22 @@ test('a wrong passphrase is told in a sentence, and the e-mail stays typed', asy
 	await expect(page.getByLabel('passphrase')).toHaveAccessibleDescription(/do not go together/);
 });
 
+test('what was typed before the scripts came stays', async ({ page }) => {
+	let come = (): void => undefined;
+	const scripts = new Promise<void>((resolve) => (come = resolve));
+	await page.route('**/*.js', async (route) => {
+		await scripts;
+		await route.continue();
+	});
+	await page.goto('/sign-in', { waitUntil: 'commit' });
+	await page.getByLabel('e-mail').fill('early@yard.example');
+	await page.getByLabel('passphrase').fill('typed at once');
+	come();
+	await page.waitForLoadState('networkidle');
+	await expect(page.getByLabel('e-mail')).toHaveValue('early@yard.example');
+	await expect(page.getByLabel('passphrase')).toHaveValue('typed at once');
+});
+
 test('the keyboard alone signs in', async ({ page }) => {
 	await page.goto('/sign-in');
 	const { email, password } = accountOf('owner');

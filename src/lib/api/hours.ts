@@ -97,7 +97,7 @@ export const hoursSchema = z.object({
 	),
 	/** Index into `days` that the sentence speaks of. */
 	spokenDay: z.int(),
-	/** The one step the sentence names; absent or null where it speaks of several or of none. */
+	/** The one step the sentence is about; absent or null where it speaks of several. */
 	spokenStep: z.string().nullish(),
 	/** Civil dusk to dawn. */
 	nights: z.array(spanSchema),

@@ -4,15 +4,17 @@ import { seedDemo } from '../../../drizzle/seed/seed';
 import { DEMO_PEOPLE, DEMO_YARD } from '../../../drizzle/seed/demo';
 import { startForecastFake, type ForecastFake } from '../../../fakes/forecast/server';
 import { healthSchema } from '../../../src/lib/api/health';
-import { hoursSchema } from '../../../src/lib/api/hours';
+import { hoursSchema, type Hours } from '../../../src/lib/api/hours';
 import { outlookResponseSchema } from '../../../src/lib/api/outlook/response';
 import { problemSchema } from '../../../src/lib/api/problem';
 import { readingSchema } from '../../../src/lib/api/reading';
+import { requireMembership } from '../../../src/lib/server/access/roles';
 import type { SignedInUser } from '../../../src/lib/server/access/sessions';
 import { composeWeb, parts } from '../../../src/lib/server/composition';
 import { users } from '../../../src/lib/server/db/schema';
 import { allYards } from '../../../src/lib/server/db/yards';
 import { refreshForecast } from '../../../src/lib/server/forecast/refresh';
+import { hoursInTwo, hoursOfYard } from '../../../src/lib/server/outlook/hours';
 import { GET as health } from '../../../src/routes/api/v1/health/+server';
 import { GET as openapi } from '../../../src/routes/api/v1/openapi.json/+server';
 import { POST as outlook } from '../../../src/routes/api/v1/outlook/+server';
@@ -103,6 +105,57 @@ describe('hours', () => {
 		const foreign = await told(hours(eventOf({ params: { slug }, user: stranger })));
 		expect(foreign.body.detail).toBe(unknown.body.detail);
 		expect(problemSchema.safeParse(foreign.body).success).toBe(true);
+	});
+});
+
+describe('hours in two', () => {
+	const NOW = new Date();
+	const inTwo = async (role: keyof typeof DEMO_PEOPLE) => {
+		const { db } = parts();
+		const locals = { user: personOf(role) };
+		const membership = await requireMembership(db, locals, slug);
+		const { bare, hours } = await hoursInTwo(db, membership, NOW);
+		return { bare, hours: await hours, whole: await hoursOfYard(db, membership, NOW) };
+	};
+
+	test('first every boat and step with its lath bare, then what the whole page says', async () => {
+		const { bare, hours, whole } = await inTwo('manager');
+		if (bare === null) throw new Error('there are steps to find hours of');
+		expect(hours).toEqual(whole);
+		expect(hoursSchema.parse(bare)).toEqual(bare);
+		const steps = bare.boats.flatMap((boat) => boat.steps);
+		expect(bare.headline.map(({ text }) => text).join('')).toContain(`${steps.length} steps`);
+		for (const step of steps) {
+			expect(step).toMatchObject({ runs: [], best: null, spoken: '' });
+			expect(step.bestByDay).toEqual(bare.days.map(() => null));
+		}
+	});
+
+	test('what is drawn with the bare laths is drawn again where it was', async () => {
+		const { bare, hours } = await inTwo('owner');
+		const still = (page: Hours | null) =>
+			page && {
+				days: page.days,
+				nights: page.nights,
+				forecast: page.forecast,
+				air: page.bands.airTemperature,
+				flags: page.bands.flags,
+				rows: page.boats.map(({ name, stand, steps }) => [
+					name,
+					stand,
+					steps.map((step) => [step.name, step.faces, step.shelter])
+				])
+			};
+		expect(still(bare)).toEqual(still(hours));
+	});
+
+	test('a queue without steps comes whole', async () => {
+		const { db } = parts();
+		const [yard] = await allYards(db);
+		const user = { ...personOf('owner'), id: '00000000-0000-4000-8000-000000000000' };
+		const answer = await hoursInTwo(db, { yard, user, role: 'owner' }, NOW);
+		expect(answer.bare).toBeNull();
+		expect(answer.hours).toMatchObject({ boats: [], headline: [{ role: 'plain' }] });
 	});
 });
 

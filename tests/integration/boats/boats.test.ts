@@ -3,7 +3,8 @@ import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { requireMembership, type Membership } from '../../../src/lib/server/access/roles';
 import { addBoat, boatOf, boatsOf, type NewBoat } from '../../../src/lib/server/boats/boats';
 import { queuedSteps } from '../../../src/lib/server/db/queue';
-import { boats, faces, jobs, stands, steps } from '../../../src/lib/server/db/schema';
+import { SAMPLE_SHEETS } from '../../../src/lib/engine';
+import { boats, faces, jobs, sheets, stands, steps } from '../../../src/lib/server/db/schema';
 import { dropStep, jobsOfBoat, queueJob } from '../../../src/lib/server/jobs/queueJob';
 import { JOB_TEMPLATES } from '../../../src/lib/server/jobs/templates';
 import { layTwoYards, type TwoYards } from '../../fixtures/twoYards';
@@ -123,6 +124,19 @@ describe('queueing a usual job', () => {
 		expect(await why(manager, strange, 'antifoulSeason')).toContain('not yours to see');
 		expect(await jobsOfBoat(database.db, id)).toEqual([]);
 	});
+});
+
+test('a coat whose sheet the yard has not is not queued, nor anything of its job', async () => {
+	const manager = await as('manager');
+	const id = (await addBoat(database.db, manager, { ...BOAT, name: 'Plover', stand: '' })) ?? '';
+	const { name } = SAMPLE_SHEETS.etchPrimer;
+	const rename = (from: string, to: string) =>
+		database.db.update(sheets).set({ name: to }).where(eq(sheets.name, from));
+	await rename(name, 'another name');
+	const result = await queueJob(database.db, manager, id, 'runningGear');
+	await rename('another name', name);
+	expect(result).toMatchObject({ outcome: 'refused', why: expect.stringContaining(name) });
+	expect(await jobsOfBoat(database.db, id)).toEqual([]);
 });
 
 describe('dropping a step', () => {

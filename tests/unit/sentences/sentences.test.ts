@@ -2,6 +2,7 @@ import { describe, expect, test } from 'vitest';
 import type { Sentence } from '../../../src/lib/api/sentence';
 import type { Limiter } from '../../../src/lib/engine';
 import { closing } from '../../../src/lib/sentences/closing';
+import { finding } from '../../../src/lib/sentences/finding';
 import {
 	headline,
 	subline,
@@ -291,5 +292,16 @@ describe('words', () => {
 		expect(list(['a'])).toBe('a');
 		expect(counted(1, 'step')).toBe('1 step');
 		expect(counted(3, 'step')).toBe('3 steps');
+	});
+});
+
+describe('while the hours are being found', () => {
+	test('the sentence counts the steps', () => {
+		expect(text(finding(12).headline)).toBe('Finding the hours of 12 steps.');
+		expect(text(finding(1).headline)).toBe('Finding the hours of 1 step.');
+	});
+
+	test('no state is told', () => {
+		expect(text(finding(3).subline)).not.toMatch(/open|tight|shut/);
 	});
 });

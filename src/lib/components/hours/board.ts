@@ -23,6 +23,10 @@ export interface Coat {
 /** What every row of the board shares. */
 export interface Board {
 	readonly hours: Hours;
+	/** False while every lath is bare because its hours are not known yet. */
+	readonly found: boolean;
+	/** It was first drawn so: what came later fits the room that was left for it. */
+	readonly beganBare: boolean;
 	readonly layout: Layout;
 	readonly axis: Axis;
 	readonly units: Units;

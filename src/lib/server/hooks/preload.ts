@@ -6,16 +6,17 @@ const EVERYWHERE = [
 	'barlow-condensed-latin-500-normal',
 	'barlow-condensed-latin-600-normal'
 ];
-/** A yard's pages name boats, and boats are in italics. */
-const IN_A_YARD = ['barlow-condensed-latin-600-italic'];
+/** Boats are named in italics. */
+const WITH_BOATS = [...EVERYWHERE, 'barlow-condensed-latin-600-italic'];
+/** Routes whose first screen names boats. */
+const NAMES_BOATS = new Set<string | null>(['/[yard]']);
 
 /**
  * Has the faces fetched beside the style sheet that asks for them, not after it: the first words
  * drawn are then in the face they stay in, and nothing moves when it comes.
  */
 export const preload: Handle = ({ event, resolve }) => {
-	const inYard = event.route.id?.startsWith('/[yard]') ?? false;
-	const faces = inYard ? [...EVERYWHERE, ...IN_A_YARD] : EVERYWHERE;
+	const faces = NAMES_BOATS.has(event.route.id) ? WITH_BOATS : EVERYWHERE;
 	return resolve(event, {
 		preload: ({ type, path }) =>
 			type === 'font'

@@ -48,6 +48,15 @@ export function queueJob(
 			.where(eq(sheets.yardId, membership.yard.id))
 			.orderBy(sheets.version);
 		const sheetIds = new Map(library.map(({ id, name }) => [name, id]));
+		// A coat without its sheet would have no limits to shut it: better no job than such a one.
+		const missing = template.steps.find(
+			({ sheet }) => sheet !== undefined && !sheetIds.has(SAMPLE_SHEETS[sheet].name)
+		);
+		if (missing?.sheet !== undefined)
+			return {
+				outcome: 'refused',
+				why: `The yard has no sheet “${SAMPLE_SHEETS[missing.sheet].name}” for ${missing.name}.`
+			};
 		const [{ last }] = await tx
 			.select({ last: max(jobs.position) })
 			.from(jobs)

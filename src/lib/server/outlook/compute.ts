@@ -7,27 +7,19 @@ import { axisAt, type Axis } from './axis';
 import { siteOf } from './engineInput';
 import { hoursOfSteps, type AxisHours } from './stepHours';
 
-/** The hours of steps on the page's axis, with the weather they were judged in. */
-export interface Outlook {
+/** What steps of a yard are judged in. */
+export interface YardWeather {
 	readonly site: Site;
 	readonly axis: Axis;
 	/** Null while no forecast was ever stored. */
 	readonly weather: SlotWeather | null;
-	readonly hours: Map<string, AxisHours>;
 }
 
-/** Judges steps of a yard in a forecast as of `now`, over the axis of the Hours page. */
-export async function computeOutlook(
-	db: Database,
-	yard: Yard,
-	queue: readonly QueuedStep[],
-	current: CurrentForecast | null,
-	now: Date
-): Promise<Outlook> {
+/** A forecast as of `now` on the axis of the Hours page, before any step is judged in it. */
+export function weatherOnAxis(yard: Yard, current: CurrentForecast | null, now: Date): YardWeather {
 	const site = siteOf(yard);
 	const page = axisAt(yard.timeZone, Math.floor(now.getTime() / 1000));
-	if (current === null)
-		return { site, axis: { ...page, offset: 0 }, weather: null, hours: new Map() };
+	if (current === null) return { site, axis: { ...page, offset: 0 }, weather: null };
 	const weather = slotWeather({
 		site,
 		forecast: current.forecast,
@@ -36,7 +28,18 @@ export async function computeOutlook(
 		from: page.start,
 		to: page.start + page.slotCount * SLOT_SECONDS
 	});
-	const axis: Axis = { ...page, offset: (page.start - weather.grid.start) / SLOT_SECONDS };
-	const hours = await hoursOfSteps(db, queue, yard, site, weather, current.runId, axis);
-	return { site, axis, weather, hours };
+	const offset = (page.start - weather.grid.start) / SLOT_SECONDS;
+	return { site, axis: { ...page, offset }, weather };
+}
+
+/** Judges steps of a yard in a forecast as of `now`, over the axis of the Hours page. */
+export async function computeOutlook(
+	db: Database,
+	yard: Yard,
+	queue: readonly QueuedStep[],
+	current: CurrentForecast | null,
+	{ site, axis, weather }: YardWeather
+): Promise<Map<string, AxisHours>> {
+	if (current === null || weather === null) return new Map();
+	return hoursOfSteps(db, queue, yard, site, weather, current.runId, axis);
 }

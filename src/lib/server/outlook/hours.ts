@@ -2,15 +2,15 @@ import type { Hours } from '../../api/hours';
 import { SLOT_SECONDS } from '../../engine';
 import { headline, subline, type SpokenDay } from '../../sentences/headline';
 import { USUAL_UNITS, type Units } from '../../units/quantity';
-import { visibleBoats, type Membership } from '../access/roles';
+import type { Membership } from '../access/roles';
 import type { SignedInUser } from '../access/sessions';
 import type { Database } from '../db/client';
-import { queuedSteps, type QueuedStep } from '../db/queue';
-import { currentForecast } from '../forecast/current';
-import { nightSpans } from './axis';
+import type { QueuedStep } from '../db/queue';
 import { bandsOf, emptyBands } from './bands';
+import { bareHours } from './bareHours';
 import { computeOutlook } from './compute';
-import { highWindDayOf, isoAt, pageDays, spokenDayOf, spokenStep, spokenView } from './speech';
+import { frameOf, groundOf, groupByBoat, type Ground } from './ground';
+import { highWindDayOf, spokenDayOf, spokenStep, spokenView } from './speech';
 import { conditionsFor, type AxisHours } from './stepHours';
 
 export const unitsOf = (user: SignedInUser): Units => ({
@@ -19,37 +19,39 @@ export const unitsOf = (user: SignedInUser): Units => ({
 	temperature: user.temperatureUnit
 });
 
-/** Steps under their boats, in the order they come. */
-function groupByBoat(
-	queue: readonly QueuedStep[],
-	viewOf: (queued: QueuedStep) => Hours['boats'][number]['steps'][number]
-): Hours['boats'] {
-	const boats = new Map<string, Hours['boats'][number]>();
-	for (const queued of queue) {
-		const { id, name } = queued.boat;
-		const boat = boats.get(id) ?? { id, name, stand: queued.stand, steps: [] };
-		boats.set(id, boat);
-		boat.steps.push(viewOf(queued));
-	}
-	return [...boats.values()];
-}
-
-/** The one step the sentence names; null where it speaks of several or of none. */
+/** The one step the sentence is about; null where it speaks of several or of none of several. */
 function spokenStepOf(queue: readonly QueuedStep[], spoken: SpokenDay): string | null {
-	const named = queue.filter((_, i) => spoken.steps[i].hours !== null);
+	const named = queue.length === 1 ? queue : queue.filter((_, i) => spoken.steps[i].hours !== null);
 	return named.length === 1 ? named[0].step.id : null;
 }
 
 /** The Hours page of a yard for one of its people, as of `now`. */
 export async function hoursOfYard(db: Database, membership: Membership, now: Date): Promise<Hours> {
+	return foundHours(db, await groundOf(db, membership, now));
+}
+
+/**
+ * The Hours page in two: with its laths bare, at once, and with the hours, when they are found.
+ * A queue without steps has nothing to find and comes whole.
+ */
+export async function hoursInTwo(
+	db: Database,
+	membership: Membership,
+	now: Date
+): Promise<{ bare: Hours | null; hours: Hours | Promise<Hours> }> {
+	const ground = await groundOf(db, membership, now);
+	const hours = foundHours(db, ground);
+	if (ground.queue.length === 0) return { bare: null, hours: await hours };
+	// Another part of the answer may fail before anybody waits for these.
+	hours.catch(() => undefined);
+	return { bare: bareHours(ground), hours };
+}
+
+async function foundHours(db: Database, ground: Ground): Promise<Hours> {
+	const { membership, now, queue, current, site, axis, weather } = ground;
 	const { yard, user } = membership;
-	const nowSeconds = Math.floor(now.getTime() / 1000);
-	const [queue, current] = await Promise.all([
-		queuedSteps(db, visibleBoats(db, membership)),
-		currentForecast(db, yard, now)
-	]);
-	const { site, axis, weather, hours } = await computeOutlook(db, yard, queue, current, now);
-	const nowSlot = Math.ceil((nowSeconds - axis.start) / SLOT_SECONDS);
+	const hours = await computeOutlook(db, yard, queue, current, ground);
+	const nowSlot = Math.ceil((Math.floor(now.getTime() / 1000) - axis.start) / SLOT_SECONDS);
 	const hoursOf = (queued: QueuedStep): AxisHours | null => hours.get(queued.step.id) ?? null;
 	const views = new Map(
 		queue.map((queued) => [
@@ -63,7 +65,7 @@ export async function hoursOfYard(db: Database, membership: Membership, now: Dat
 		return view;
 	};
 
-	const days = pageDays(axis, weather, yard.highWindGust);
+	const frame = frameOf(ground);
 	const spokenDay = spokenDayOf([...views.values()], yard.timeZone, now);
 	const spoken: SpokenDay = {
 		day: spokenDay === 0 ? 'today' : 'tomorrow',
@@ -77,25 +79,13 @@ export async function hoursOfYard(db: Database, membership: Membership, now: Dat
 			? null
 			: conditionsFor(weather, site)(firstOpenAir)[0];
 	return {
-		yard: {
-			slug: yard.slug,
-			name: yard.name,
-			timeZone: yard.timeZone,
-			liftGust: yard.liftGust,
-			highWindGust: yard.highWindGust
-		},
-		now: now.toISOString(),
-		start: isoAt(axis, 0),
-		slotCount: axis.slotCount,
-		days,
+		...frame,
 		spokenDay,
 		spokenStep: spokenStepOf(queue, spoken),
-		nights: nightSpans(site, axis),
-		forecast: current?.source ?? null,
 		headline: headline(spoken),
 		subline: subline({
 			...spoken,
-			highWind: highWindDayOf(days, weather, axis, yard.timeZone, unitsOf(user))
+			highWind: highWindDayOf(frame.days, weather, axis, yard.timeZone, unitsOf(user))
 		}),
 		bands: weather === null ? emptyBands(axis.slotCount) : bandsOf(weather, axis, face),
 		boats: groupByBoat(queue, viewOf)

@@ -15,6 +15,11 @@ const LAST_HOUR_OF_TODAY = 15;
 export const isoAt = (axis: Pick<Axis, 'start'>, slot: number): string =>
 	new Date((axis.start + slot * SLOT_SECONDS) * 1000).toISOString();
 
+/** The day there is most to say of at this hour, as an index of the axis' days. */
+export function dayToSpeakOf(timeZone: string, now: Date): number {
+	return Number(clock(now.getTime(), timeZone).slice(0, 2)) < LAST_HOUR_OF_TODAY ? 0 : 1;
+}
+
 /**
  * The day the sentence speaks of, as an index of the axis' days: today until no step has a start
  * left today or it is 15:00, whichever is first; then tomorrow.
@@ -24,9 +29,8 @@ export function spokenDayOf(
 	timeZone: string,
 	now: Date
 ): number {
-	const hour = Number(clock(now.getTime(), timeZone).slice(0, 2));
 	const left = steps.some(({ bestByDay }) => bestByDay[0] !== null);
-	return left && hour < LAST_HOUR_OF_TODAY ? 0 : 1;
+	return left ? dayToSpeakOf(timeZone, now) : 1;
 }
 
 const dayStartSlot = (axis: Axis, day: number): number =>

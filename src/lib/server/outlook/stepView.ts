@@ -85,15 +85,9 @@ export function shutBy(hours: AxisHours, from: number, to: number): Limiter {
 	return most?.[0] ?? (closed > 0 ? 'hours' : 'none');
 }
 
-/** A step of the page, its spoken text left to whoever knows the days' names. */
-export function stepView(
-	queued: QueuedStep,
-	hours: AxisHours | null,
-	axis: Axis,
-	nowSlot: number
-): Omit<HoursStep, 'spoken'> {
-	const { step, job, sheet, faces } = queued;
-	const common = {
+/** What a step is, whatever its hours. */
+export function stepFacts({ step, job, sheet, faces }: QueuedStep) {
+	return {
 		id: step.id,
 		jobId: job.id,
 		job: job.name,
@@ -105,11 +99,21 @@ export function stepView(
 		sampleSheet: sheet?.sample ?? false,
 		sheet: sheet?.name ?? null,
 		caution: cautionOf(step.kind, step.method, sheet?.hazards ?? [])
-	};
+	} satisfies Partial<HoursStep>;
+}
+
+/** A step of the page, its spoken text left to whoever knows the days' names. */
+export function stepView(
+	queued: QueuedStep,
+	hours: AxisHours | null,
+	axis: Axis,
+	nowSlot: number
+): Omit<HoursStep, 'spoken'> {
+	const facts = stepFacts(queued);
 	if (hours === null) {
-		const missing = faces.length === 0 ? 'face on this step' : 'forecast';
+		const missing = queued.faces.length === 0 ? 'face on this step' : 'forecast';
 		return {
-			...common,
+			...facts,
 			runs: [{ from: 0, to: axis.slotCount, state: 'shut', limiter: 'noData', missing }],
 			best: null,
 			bestByDay: axis.days.map(() => null),
@@ -118,7 +122,7 @@ export function stepView(
 	}
 	const { stretches, best } = stretchesOf(hours, hours.durationSlots, nowSlot);
 	return {
-		...common,
+		...facts,
 		runs: runsOfAxis(hours),
 		best,
 		bestByDay: bestByDay(hours, stretches, axis),

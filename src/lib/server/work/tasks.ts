@@ -8,7 +8,7 @@ import { allYards, yardById } from '../db/yards';
 import { currentForecast } from '../forecast/current';
 import { refreshForecast } from '../forecast/refresh';
 import { deliverDue, smtpSender } from '../mail/deliver';
-import { computeOutlook } from '../outlook/compute';
+import { computeOutlook, weatherOnAxis } from '../outlook/compute';
 import { refreshOffsetSeconds } from './spread';
 
 const ofYard = z.object({ yardId: z.string() });
@@ -61,7 +61,8 @@ export function createTasks({ db, config, log, sessions }: Parts): TaskList {
 			if (yard === null) return;
 			const now = new Date();
 			const queue = await queuedSteps(db, allBoatsOf(yardId));
-			await computeOutlook(db, yard, queue, await currentForecast(db, yard, now), now);
+			const current = await currentForecast(db, yard, now);
+			await computeOutlook(db, yard, queue, current, weatherOnAxis(yard, current, now));
 			log.info({ yardId, steps: queue.length }, 'outlook computed');
 		},
 		/** Every minute, and when a letter is posted: sends what is due. */
