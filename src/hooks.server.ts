@@ -2,6 +2,7 @@ import type { ServerInit } from '@sveltejs/kit';
 import { building } from '$app/environment';
 import { env } from '$env/dynamic/private';
 import { composeWeb } from '$lib/server/composition';
+import { refuseUnwalled } from '$lib/server/db/health';
 import { failure } from '$lib/server/hooks/failure';
 import { jsonOrigin } from '$lib/server/hooks/jsonOrigin';
 import { preload } from '$lib/server/hooks/preload';
@@ -10,10 +11,11 @@ import { securityHeaders } from '$lib/server/hooks/securityHeaders';
 import { session } from '$lib/server/hooks/session';
 import { sequence } from '@sveltejs/kit/hooks';
 
-export const init: ServerInit = () => {
+export const init: ServerInit = async () => {
 	if (building) return;
-	const composition = composeWeb(env);
+	const composition = composeWeb(env, 'required');
 	process.once('sveltekit:shutdown', () => void composition.close());
+	await refuseUnwalled(composition.db);
 };
 
 export const handle = sequence(requestId, securityHeaders, session, jsonOrigin, preload);

@@ -85,11 +85,13 @@ export async function startStack({
 		const cluster = await startCluster({ dataFolder, ...postgres, throwAway });
 		stops.push(() => cluster.stop());
 		const databaseUrl = cluster.urlOf(DATABASE);
+		const webUrl = cluster.webUrlOf(DATABASE);
 		const prepared = await runToEnd(process.execPath, [
 			...TSX,
 			join(ROOT, 'drizzle/prepare.ts'),
 			cluster.url,
-			databaseUrl
+			databaseUrl,
+			webUrl
 		]);
 		const { accounts } = JSON.parse(prepared.trim().split('\n').at(-1));
 		if (!dev) await ensureBuild();
@@ -124,7 +126,8 @@ export async function startStack({
 					'--strictPort'
 				]
 			: [join(ROOT, 'build/index.js')];
-		children.start('web', process.execPath, web, env);
+		// The web process is held by row-level security; the worker owns the tables.
+		children.start('web', process.execPath, web, { ...env, DATABASE_URL: webUrl });
 		children.start(
 			'worker',
 			process.execPath,

@@ -1,11 +1,12 @@
 import { randomBytes } from 'node:crypto';
 import pg from 'pg';
-import { ensureDatabase, migrateDatabase } from '../../drizzle/migrate';
+import { ensureDatabase, letWebSignIn, migrateDatabase, WEB_ROLE } from '../../drizzle/migrate';
 import { createDatabase } from '../../src/lib/server/db/client';
 
 const TEMPLATE = 'yardglass_template';
 /** Any number: held while the template is made, so that test files running at once make it once. */
 const TEMPLATE_LOCK = 7_302_116;
+const WEB_PASSWORD = 'of the tests alone';
 
 function adminUrl(): string {
 	const url = process.env.TEST_DATABASE_URL;
@@ -19,6 +20,14 @@ function adminUrl(): string {
 const urlOf = (database: string): string => {
 	const url = new URL(adminUrl());
 	url.pathname = `/${database}`;
+	return url.toString();
+};
+
+/** The same as the web process signs in: held by row-level security. */
+const webUrlOf = (database: string): string => {
+	const url = new URL(urlOf(database));
+	url.username = WEB_ROLE;
+	url.password = WEB_PASSWORD;
 	return url.toString();
 };
 
@@ -42,12 +51,14 @@ export async function createTestDatabase() {
 		await client.query('select pg_advisory_lock($1)', [TEMPLATE_LOCK]);
 		await ensureDatabase(adminUrl(), TEMPLATE);
 		await migrateDatabase(urlOf(TEMPLATE));
+		await letWebSignIn(urlOf(TEMPLATE), WEB_PASSWORD);
 		await client.query(`create database ${name} template ${TEMPLATE}`);
 	});
 	const url = urlOf(name);
 	const { db, pool } = createDatabase(url);
 	return {
 		url,
+		webUrl: webUrlOf(name),
 		db,
 		pool,
 		async drop(): Promise<void> {

@@ -15,10 +15,11 @@ export interface Composition {
 /** Builds the parts from the environment. Throws ConfigError on a bad value. */
 export function compose(
 	environment: Record<string, string | undefined>,
-	process: 'web' | 'worker'
+	process: 'web' | 'worker',
+	walls?: 'required'
 ): Composition {
 	const config = readConfig(environment);
-	const { db, pool } = createDatabase(config.DATABASE_URL);
+	const { db, pool } = createDatabase(config.DATABASE_URL, walls);
 	return {
 		config,
 		db,
@@ -31,8 +32,11 @@ export function compose(
 let web: Composition | null = null;
 
 /** Makes the web process's parts; called by the `init` hook, before the first request. */
-export function composeWeb(environment: Record<string, string | undefined>): Composition {
-	web = compose(environment, 'web');
+export function composeWeb(
+	environment: Record<string, string | undefined>,
+	walls?: 'required'
+): Composition {
+	web = compose(environment, 'web', walls);
 	return web;
 }
 

@@ -23,15 +23,16 @@ let yards: TwoYards;
 beforeAll(async () => {
 	fake = await startForecastFake({ scenario: { kind: 'story', members: 2 } });
 	database = await createTestDatabase();
-	composeWeb({
-		DATABASE_URL: database.url,
+	const settings = {
+		DATABASE_URL: database.webUrl,
 		ORIGIN: 'http://127.0.0.1',
 		LOG_LEVEL: 'silent',
 		OPEN_METEO_URL: fake.url,
 		OPEN_METEO_ENSEMBLE_URL: fake.url,
 		MET_NORWAY_URL: fake.url,
 		FORECAST_CONTACT: 'harbour@yard.example'
-	});
+	};
+	composeWeb(settings, 'required');
 	yards = await layTwoYards(database.db);
 });
 afterAll(async () => {

@@ -1,6 +1,7 @@
 import { isActionFailure, isHttpError, isRedirect, type RequestEvent } from '@sveltejs/kit';
 import type { SignedInUser } from '../../../src/lib/server/access/sessions';
 import { parts } from '../../../src/lib/server/composition';
+import { onBehalfOf } from '../../../src/lib/server/db/behalf';
 import type { Answer, Row } from './routeTable';
 
 /** One way into the product: a load, an action or a method of a route. */
@@ -122,7 +123,8 @@ export async function knock(
 	user: SignedInUser | null
 ): Promise<Answer> {
 	try {
-		const told = await door.open(eventAt(door, row, params, user));
+		const event = eventAt(door, row, params, user);
+		const told = await onBehalfOf(user?.id ?? null, async () => door.open(event));
 		if (told instanceof Response) return answerOfStatus(told.status);
 		return isActionFailure(told) ? answerOfStatus(told.status) : 'let in';
 	} catch (thrown) {

@@ -1,6 +1,7 @@
 import { eq, like, or, sql } from 'drizzle-orm';
 import { z } from 'zod';
 import { siteSchema } from '../../engine';
+import { inAccounts } from '../db/accountsWork';
 import type { Database } from '../db/client';
 import { memberships, users, yards } from '../db/schema';
 import { laySamples } from '../jobs/samples';
@@ -82,8 +83,13 @@ const FIRST_HOURS = [
 	{ days: [6], from: '08:00', to: '13:00' }
 ];
 
+/** Founds a yard by somebody who is signed in; returns its slug. */
+export function foundYard(db: Database, place: YardPlace, managerId: string): Promise<string> {
+	return inAccounts(db, (tx) => createYard(tx, place, managerId));
+}
+
 /** Makes a yard with its first manager; returns its slug. */
-export async function createYard(db: Writer, place: YardPlace, managerId: string): Promise<string> {
+async function createYard(db: Writer, place: YardPlace, managerId: string): Promise<string> {
 	const slug = await freeSlug(db, place.name);
 	const [{ id }] = await db
 		.insert(yards)
@@ -115,7 +121,7 @@ export async function askToFound(
 ): Promise<void> {
 	// Hashed whether it will be used or not, so that both answers take as long.
 	const passwordHash = await hashPassword(passphrase);
-	await db.transaction(async (tx) => {
+	await inAccounts(db, async (tx) => {
 		const known = await tx
 			.select({ id: users.id })
 			.from(users)
@@ -138,7 +144,7 @@ export function finishFounding(
 	db: Database,
 	token: string
 ): Promise<{ userId: string; slug: string } | null> {
-	return db.transaction(async (tx) => {
+	return inAccounts(db, async (tx) => {
 		const link = await followLink(tx, token, 'foundYard');
 		if (link === null) return null;
 		const { place, founder, passwordHash } = pendingSchema.parse(link.payload);

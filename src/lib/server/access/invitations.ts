@@ -1,5 +1,7 @@
 import { and, asc, eq, gt, sql } from 'drizzle-orm';
 import { z } from 'zod';
+import { inAccounts } from '../db/accountsWork';
+import { onDuty } from '../db/behalf';
 import type { Database } from '../db/client';
 import {
 	boatPainters,
@@ -81,7 +83,11 @@ export function invite(
 }
 
 /** What an invitation's page shows; null where it is over. `hasAccount`: sign in instead of signing up. */
-export async function invitationOf(db: Database, token: string) {
+export function invitationOf(db: Database, token: string) {
+	return onDuty('accounts', () => findInvitation(db, token));
+}
+
+async function findInvitation(db: Database, token: string) {
 	const [row] = await db
 		.select({
 			email: invitations.email,
@@ -131,7 +137,7 @@ export function acceptInvitation(
 	token: string,
 	user: { readonly id: string; readonly email: string }
 ): Promise<boolean> {
-	return db.transaction(async (tx) => {
+	return inAccounts(db, async (tx) => {
 		const invitation = await followInvitation(tx, token);
 		if (invitation === null) return false;
 		if (invitation.email.toLowerCase() !== user.email.toLowerCase()) {
@@ -154,7 +160,7 @@ export function joinWithNewAccount(
 	token: string,
 	{ name, passwordHash }: { readonly name: string; readonly passwordHash: string }
 ): Promise<string | null> {
-	return db.transaction(async (tx) => {
+	return inAccounts(db, async (tx) => {
 		const invitation = await followInvitation(tx, token);
 		if (invitation === null) return null;
 		const [user] = await tx

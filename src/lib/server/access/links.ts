@@ -1,5 +1,6 @@
 import { createHash, randomBytes } from 'node:crypto';
 import { and, eq, gt, lt, sql } from 'drizzle-orm';
+import { onDuty } from '../db/behalf';
 import type { Database } from '../db/client';
 import { accountLinks, type LinkKind } from '../db/schema';
 import type { Writer } from '../mail/outbox';
@@ -37,10 +38,9 @@ const live = (token: string, kind: LinkKind) =>
 
 /** Whether a link can still be followed. */
 export async function isLive(db: Database, token: string, kind: LinkKind): Promise<boolean> {
-	const rows = await db
-		.select({ kind: accountLinks.kind })
-		.from(accountLinks)
-		.where(live(token, kind));
+	const rows = await onDuty('accounts', () =>
+		db.select({ kind: accountLinks.kind }).from(accountLinks).where(live(token, kind))
+	);
 	return rows.length > 0;
 }
 

@@ -1,4 +1,5 @@
 import { eq, sql } from 'drizzle-orm';
+import { inAccounts } from '../db/accountsWork';
 import type { Database } from '../db/client';
 import { users } from '../db/schema';
 import { resetLetter } from '../mail/letters';
@@ -11,7 +12,7 @@ const LINK_HOURS = 2;
 
 /** Mails a link for a new passphrase, where the address has an account; tells nobody whether it has. */
 export async function askToReset(db: Database, email: string, origin: string): Promise<void> {
-	await db.transaction(async (tx) => {
+	await inAccounts(db, async (tx) => {
 		const [user] = await tx
 			.select({ id: users.id, email: users.email })
 			.from(users)
@@ -38,7 +39,7 @@ export async function resetPassphrase(
 	passphrase: string
 ): Promise<string | null> {
 	const passwordHash = await hashPassword(passphrase);
-	const userId = await db.transaction(async (tx) => {
+	const userId = await inAccounts(db, async (tx) => {
 		const link = await followLink(tx, token, 'resetPassphrase');
 		if (link?.userId == null) return null;
 		await tx.update(users).set({ passwordHash }).where(eq(users.id, link.userId));

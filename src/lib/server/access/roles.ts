@@ -1,5 +1,6 @@
 import { error } from '@sveltejs/kit';
 import { and, eq, exists, sql, type SQL } from 'drizzle-orm';
+import { onBehalfOf } from '../db/behalf';
 import type { Database } from '../db/client';
 import { boatPainters, boats, memberships, yards, type Role, type Yard } from '../db/schema';
 import type { SignedInUser } from './sessions';
@@ -97,12 +98,14 @@ export function visibleBoats(
 	}
 }
 
-/** The yards of a person, by name. */
+/** The yards of a person, by name; of one who has just signed in, too. */
 export function yardsOf(db: Database, userId: string) {
-	return db
-		.select({ id: yards.id, slug: yards.slug, name: yards.name, role: memberships.role })
-		.from(memberships)
-		.innerJoin(yards, eq(yards.id, memberships.yardId))
-		.where(eq(memberships.userId, userId))
-		.orderBy(yards.name);
+	return onBehalfOf(userId, () =>
+		db
+			.select({ id: yards.id, slug: yards.slug, name: yards.name, role: memberships.role })
+			.from(memberships)
+			.innerJoin(yards, eq(yards.id, memberships.yardId))
+			.where(eq(memberships.userId, userId))
+			.orderBy(yards.name)
+	);
 }

@@ -2,6 +2,7 @@ import { DrizzlePostgreSQLAdapter } from '@lucia-auth/adapter-drizzle';
 import { createHash } from 'node:crypto';
 import { and, desc, eq, gt } from 'drizzle-orm';
 import { Lucia, TimeSpan, type Adapter, type DatabaseSession } from 'lucia';
+import { onBehalfOf, onDuty } from '../db/behalf';
 import type { Database } from '../db/client';
 import { sessions, users, type User } from '../db/schema';
 
@@ -110,11 +111,12 @@ export function createSessions(db: Database, { secure }: { secure: boolean }) {
 		/** Signs a user in; the cookie carries the only copy of the token. */
 		async create(userId: string, userAgent: string | null = null): Promise<SessionCookie> {
 			const now = new Date();
-			const session = await lucia.createSession(userId, {
+			const device = {
 				createdAt: now,
 				lastSeenAt: now,
 				userAgent: userAgent?.slice(0, 400) ?? null
-			});
+			};
+			const session = await onDuty('accounts', () => lucia.createSession(userId, device));
 			return cookie(session.id, SESSION_DAYS * 86_400);
 		},
 		/**
@@ -127,18 +129,20 @@ export function createSessions(db: Database, { secure }: { secure: boolean }) {
 			| { user: SignedInUser; session: Session; renewed: SessionCookie | null }
 			| { user: null; session: null; renewed: null }
 		> {
-			const { user, session } = await lucia.validateSession(token);
+			const { user, session } = await onDuty('accounts', () => lucia.validateSession(token));
 			if (user === null) return { user: null, session: null, renewed: null };
 			const now = Date.now();
 			if (now - session.createdAt.getTime() > MOST_DAYS * DAY_MS) {
-				await lucia.invalidateSession(token);
+				await this.end(token);
 				return { user: null, session: null, renewed: null };
 			}
 			if (now - session.lastSeenAt.getTime() > SEEN_MS)
-				await db
-					.update(sessions)
-					.set({ lastSeenAt: new Date(now) })
-					.where(eq(sessions.id, hashed(token)));
+				await onDuty('accounts', () =>
+					db
+						.update(sessions)
+						.set({ lastSeenAt: new Date(now) })
+						.where(eq(sessions.id, hashed(token)))
+				);
 			return {
 				user,
 				session: { id: session.id, expiresAt: session.expiresAt },
@@ -147,25 +151,30 @@ export function createSessions(db: Database, { secure }: { secure: boolean }) {
 		},
 		/** The devices a person is signed in on, the last heard of first; `token` marks this one. */
 		async devicesOf(userId: string, token: string | null) {
-			const rows = await db
-				.select({
-					id: sessions.id,
-					createdAt: sessions.createdAt,
-					lastSeenAt: sessions.lastSeenAt,
-					userAgent: sessions.userAgent
-				})
-				.from(sessions)
-				.where(and(eq(sessions.userId, userId), gt(sessions.expiresAt, new Date())))
-				.orderBy(desc(sessions.lastSeenAt));
+			const rows = await onBehalfOf(userId, () =>
+				db
+					.select({
+						id: sessions.id,
+						createdAt: sessions.createdAt,
+						lastSeenAt: sessions.lastSeenAt,
+						userAgent: sessions.userAgent
+					})
+					.from(sessions)
+					.where(and(eq(sessions.userId, userId), gt(sessions.expiresAt, new Date())))
+					.orderBy(desc(sessions.lastSeenAt))
+			);
 			const own = token === null ? null : hashed(token);
 			return rows.map((row) => ({ ...row, isThis: row.id === own }));
 		},
 		/** Ends one of a person's sessions by the id that their list shows. */
 		async endDevice(userId: string, id: string): Promise<void> {
-			await db.delete(sessions).where(and(eq(sessions.userId, userId), eq(sessions.id, id)));
+			await onBehalfOf(userId, () =>
+				db.delete(sessions).where(and(eq(sessions.userId, userId), eq(sessions.id, id)))
+			);
 		},
-		end: (token: string): Promise<void> => lucia.invalidateSession(token),
-		endAllOf: (userId: string): Promise<void> => lucia.invalidateUserSessions(userId),
+		end: (token: string): Promise<void> => onDuty('accounts', () => lucia.invalidateSession(token)),
+		endAllOf: (userId: string): Promise<void> =>
+			onDuty('accounts', () => lucia.invalidateUserSessions(userId)),
 		blankCookie: (): SessionCookie => cookie('', 0),
 		deleteExpired: (): Promise<void> => lucia.deleteExpiredSessions()
 	};

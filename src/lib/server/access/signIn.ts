@@ -1,6 +1,7 @@
 import { createHash } from 'node:crypto';
 import { eq, inArray, sql } from 'drizzle-orm';
 import { z } from 'zod';
+import { onDuty } from '../db/behalf';
 import type { Database } from '../db/client';
 import { signInAttempts, users } from '../db/schema';
 import { verifyPassword } from './passwords';
@@ -54,7 +55,15 @@ async function countFailure(db: Database, key: string): Promise<void> {
  *
  * @param address - the network address the attempt comes from
  */
-export async function signIn(
+export function signIn(
+	db: Database,
+	given: z.infer<typeof signInSchema>,
+	address: string
+): Promise<SignInResult> {
+	return onDuty('accounts', () => check(db, given, address));
+}
+
+async function check(
 	db: Database,
 	{ email, password }: z.infer<typeof signInSchema>,
 	address: string

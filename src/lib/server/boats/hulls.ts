@@ -36,7 +36,10 @@ const USUAL_FACES: readonly {
 ];
 
 /** The faces a new boat starts with; its people take away what it has not. Bottoms are dark. */
-export function usualFaces(hull: Hull, colour: Colour): Omit<FaceRow, 'id' | 'boatId'>[] {
+export function usualFaces(
+	hull: Hull,
+	colour: Colour
+): Omit<FaceRow, 'id' | 'boatId' | 'yardId'>[] {
 	return USUAL_FACES.flatMap(({ name, sides, material, finish }) => {
 		const { tilt, bearing, bothSides } = FACE_ORIENTATIONS[name];
 		const below = ['bottom', 'keel', 'rudder', 'driveLeg', 'propeller'].includes(name);

@@ -1,14 +1,15 @@
 import { drizzle } from 'drizzle-orm/node-postgres';
-import pg from 'pg';
 import * as schema from './schema';
+import { WalledPool } from './walledPool';
 
 /**
  * A pool and the query builder on it. The caller ends the pool.
  *
  * @param url - connection string of the database
+ * @param walls - `required` refuses a role that row-level security does not hold
  */
-export function createDatabase(url: string) {
-	const pool = new pg.Pool({ connectionString: url, max: 10 });
+export function createDatabase(url: string, walls: 'required' | 'passed' = 'passed') {
+	const pool = new WalledPool({ connectionString: url, max: 10 }, walls);
 	// A connection dropped by the server while idle must not end the process; the pool replaces it.
 	pool.on('error', () => undefined);
 	return { pool, db: drizzle(pool, { schema, casing: 'snake_case' }) };

@@ -1,7 +1,9 @@
 import { max, sql } from 'drizzle-orm';
 import { z } from 'zod';
+import { onDuty } from './behalf';
 import type { Database } from './client';
 import { providerStates, workers } from './schema';
+import { UnwalledError } from './walledPool';
 
 /** Whether the database answers. */
 export async function databaseAnswers(db: Database): Promise<boolean> {
@@ -13,27 +15,40 @@ export async function databaseAnswers(db: Database): Promise<boolean> {
 	}
 }
 
+/**
+ * Stops a process at its start where its role passes the walls. A database that does not answer
+ * yet is no reason to stop: each connection is asked again.
+ *
+ * @throws {UnwalledError}
+ */
+export async function refuseUnwalled(db: Database): Promise<void> {
+	try {
+		await db.execute(sql`select 1`);
+	} catch (error) {
+		const cause = error instanceof Error ? error.cause : null;
+		if (cause instanceof UnwalledError) throw cause;
+	}
+}
+
 /** How the forecast providers have answered over all yards, newest success first. */
 export function providerHealth(db: Database) {
-	return db
-		.select({
-			provider: providerStates.provider,
-			lastSuccessAt: max(providerStates.lastSuccessAt),
-			openUntil: max(providerStates.openUntil)
-		})
-		.from(providerStates)
-		.groupBy(providerStates.provider)
-		.orderBy(providerStates.provider);
+	return onDuty('health', () =>
+		db
+			.select({
+				provider: providerStates.provider,
+				lastSuccessAt: max(providerStates.lastSuccessAt),
+				openUntil: max(providerStates.openUntil)
+			})
+			.from(providerStates)
+			.groupBy(providerStates.provider)
+			.orderBy(providerStates.provider)
+	);
 }
 
 const queueRow = z.object({ waiting: z.coerce.number(), failed: z.coerce.number() });
 
-/** Jobs waiting and jobs given up; null while no worker has ever made the queue. */
+/** Jobs waiting and jobs given up. */
 export async function queueHealth(db: Database) {
-	const found = await db.execute(
-		sql`select to_regclass('graphile_worker.jobs') is not null as made`
-	);
-	if (found.rows[0]?.made !== true) return null;
 	const { rows } = await db.execute(
 		sql`select count(*) filter (where attempts < max_attempts) as waiting,
 			count(*) filter (where attempts >= max_attempts) as failed from graphile_worker.jobs`

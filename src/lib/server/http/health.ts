@@ -16,7 +16,7 @@ export async function healthOf(db: Database, now: Date): Promise<Health> {
 	]);
 	const workerLives = seenAt !== null && now.getTime() - seenAt.getTime() < WORKER_GONE_MS;
 	const answered = providers.some(({ openUntil }) => openUntil === null || openUntil < now);
-	const well = workerLives && answered && (queue?.failed ?? 0) === 0;
+	const well = workerLives && answered && queue.failed === 0;
 	return {
 		status: well ? 'ok' : 'degraded',
 		database: 'ok',
@@ -25,6 +25,6 @@ export async function healthOf(db: Database, now: Date): Promise<Health> {
 			lastSuccessAt: lastSuccessAt?.toISOString() ?? null,
 			circuitOpen: openUntil !== null && openUntil > now
 		})),
-		queue: queue === null ? null : { ...queue, workerSeenAt: seenAt?.toISOString() ?? null }
+		queue: { ...queue, workerSeenAt: seenAt?.toISOString() ?? null }
 	};
 }

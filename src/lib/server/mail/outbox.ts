@@ -44,19 +44,6 @@ export async function post(db: Writer, letter: Letter): Promise<void> {
 		text: textOf(letter),
 		html: htmlOf(letter)
 	});
-	await nudgeWorker(db);
-}
-
-/**
- * Asks a worker to look at the outbox now. Its own clock does so every minute: without a worker's
- * queue there is nobody to ask.
- */
-async function nudgeWorker(db: Writer): Promise<void> {
-	const { rows } = await db.execute<{ there: boolean }>(
-		sql`select to_regproc('graphile_worker.add_job') is not null as there`
-	);
-	if (rows[0]?.there !== true) return;
-	await db.execute(
-		sql`select graphile_worker.add_job('deliverMail', '{}'::json, job_key := 'deliverMail')`
-	);
+	// A worker looks now; its own clock does so every minute.
+	await db.execute(sql`select app_ask_worker('deliverMail', '{}', 'deliverMail')`);
 }

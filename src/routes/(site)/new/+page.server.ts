@@ -3,8 +3,8 @@ import { z } from 'zod';
 import { timeZoneAt } from '$lib/server/access/timeZone';
 import {
 	askToFound,
-	createYard,
 	founderSchema,
+	foundYard,
 	yardPlaceSchema
 } from '$lib/server/access/foundYard';
 import { passphraseSchema, passphraseWeakness } from '$lib/server/access/strength';
@@ -42,7 +42,7 @@ export const actions: Actions = {
 		if (user !== null) {
 			const { data, trouble } = await readForm(request, placeForm);
 			if (trouble !== null) return fail(400, { ...trouble, message: '', sentTo: null });
-			const slug = await db.transaction((tx) => createYard(tx, placeOf(data), user.id));
+			const slug = await foundYard(db, placeOf(data), user.id);
 			redirect(303, `/${slug}`);
 		}
 		const read = await readForm(request, newcomerForm);

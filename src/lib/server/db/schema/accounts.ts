@@ -2,6 +2,7 @@ import { sql } from 'drizzle-orm';
 import { index, integer, jsonb, pgTable, text, timestamp, uuid } from 'drizzle-orm/pg-core';
 import { boats } from './boats';
 import { users } from './people';
+import { wallOfAccounts, wallOfPost, wallOfYard } from './walls';
 import { ROLES, yards } from './yard';
 
 /** What a link in a mail may be for. */
@@ -23,7 +24,7 @@ export const accountLinks = pgTable(
 		payload: jsonb().notNull().default({}),
 		expiresAt: timestamp({ withTimezone: true }).notNull()
 	},
-	(table) => [index().on(table.userId), index().on(table.expiresAt)]
+	(table) => [index().on(table.userId), index().on(table.expiresAt), wallOfAccounts()]
 );
 
 /** People asked to join a yard, until they do. */
@@ -45,7 +46,11 @@ export const invitations = pgTable(
 		createdAt: timestamp({ withTimezone: true }).notNull().defaultNow(),
 		expiresAt: timestamp({ withTimezone: true }).notNull()
 	},
-	(table) => [index().on(table.yardId), index('invitations_email').on(sql`lower(${table.email})`)]
+	(table) => [
+		index().on(table.yardId),
+		index('invitations_email').on(sql`lower(${table.email})`),
+		wallOfYard(table.yardId, 'accounts')
+	]
 );
 export type Invitation = typeof invitations.$inferSelect;
 
@@ -71,7 +76,8 @@ export const mails = pgTable(
 	(table) => [
 		index('mails_due')
 			.on(table.nextTryAt)
-			.where(sql`${table.sentAt} is null`)
+			.where(sql`${table.sentAt} is null`),
+		wallOfPost()
 	]
 );
 export type Mail = typeof mails.$inferSelect;

@@ -12,6 +12,7 @@ import {
 } from 'drizzle-orm/pg-core';
 import { FACE_NAMES, FINISHES, MATERIALS } from '../../../engine';
 import { users } from './people';
+import { wallOfYard, yardOfParent } from './walls';
 import { stands, yards } from './yard';
 
 /** A boat ashore. `heading` is where the bow points, degrees from north clockwise. */
@@ -29,7 +30,11 @@ export const boats = pgTable(
 		hauledOn: date({ mode: 'string' }),
 		launchBy: date({ mode: 'string' })
 	},
-	(table) => [index().on(table.yardId), index().on(table.ownerId)]
+	(table) => [
+		index().on(table.yardId),
+		index().on(table.ownerId),
+		wallOfYard(table.yardId, 'accounts')
+	]
 );
 export type Boat = typeof boats.$inferSelect;
 
@@ -40,11 +45,16 @@ export const boatPainters = pgTable(
 		boatId: uuid()
 			.notNull()
 			.references(() => boats.id, { onDelete: 'cascade' }),
+		yardId: yardOfParent(),
 		userId: uuid()
 			.notNull()
 			.references(() => users.id, { onDelete: 'cascade' })
 	},
-	(table) => [primaryKey({ columns: [table.boatId, table.userId] }), index().on(table.userId)]
+	(table) => [
+		primaryKey({ columns: [table.boatId, table.userId] }),
+		index().on(table.userId),
+		wallOfYard(table.yardId, 'accounts')
+	]
 );
 
 /**
@@ -59,6 +69,7 @@ export const faces = pgTable(
 		boatId: uuid()
 			.notNull()
 			.references(() => boats.id, { onDelete: 'cascade' }),
+		yardId: yardOfParent(),
 		name: text({ enum: FACE_NAMES }).notNull(),
 		side: text({ enum: ['port', 'starboard', 'both'] }).notNull(),
 		tilt: doublePrecision().notNull(),
@@ -73,6 +84,6 @@ export const faces = pgTable(
 		/** m² */
 		area: doublePrecision()
 	},
-	(table) => [unique().on(table.boatId, table.name, table.side)]
+	(table) => [unique().on(table.boatId, table.name, table.side), wallOfYard(table.yardId)]
 );
 export type FaceRow = typeof faces.$inferSelect;

@@ -11,6 +11,7 @@ import {
 } from 'drizzle-orm/pg-core';
 import type { Hourly, Member } from '../../../engine';
 import { steps } from './jobs';
+import { wallOfYard, yardOfParent } from './walls';
 import { yards } from './yard';
 
 export const PROVIDERS = ['open-meteo', 'met-norway'] as const;
@@ -34,7 +35,7 @@ export const forecastRuns = pgTable(
 			.notNull()
 			.generatedAlwaysAs(sql`coalesce(jsonb_array_length("members"), 0)`)
 	},
-	(table) => [index().on(table.yardId, table.fetchedAt.desc())]
+	(table) => [index().on(table.yardId, table.fetchedAt.desc()), wallOfYard(table.yardId)]
 );
 export type ForecastRun = typeof forecastRuns.$inferSelect;
 
@@ -59,7 +60,10 @@ export const providerStates = pgTable(
 		trouble: text(),
 		troubleAt: timestamp({ withTimezone: true })
 	},
-	(table) => [primaryKey({ columns: [table.yardId, table.provider] })]
+	(table) => [
+		primaryKey({ columns: [table.yardId, table.provider] }),
+		wallOfYard(table.yardId, 'health')
+	]
 );
 
 /** Computed hours, keyed by a hash of the engine's whole input and its version. Can be thrown away. */
@@ -70,8 +74,9 @@ export const outlooks = pgTable(
 		stepId: uuid()
 			.notNull()
 			.references(() => steps.id, { onDelete: 'cascade' }),
+		yardId: yardOfParent(),
 		hours: jsonb().notNull(),
 		createdAt: timestamp({ withTimezone: true }).notNull().defaultNow()
 	},
-	(table) => [index().on(table.stepId)]
+	(table) => [index().on(table.stepId), wallOfYard(table.yardId)]
 );

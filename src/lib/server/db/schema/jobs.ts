@@ -13,6 +13,7 @@ import {
 } from 'drizzle-orm/pg-core';
 import { METHODS, SHELTERS, STEP_KINDS, type Limits, type Times } from '../../../engine';
 import { boats, faces } from './boats';
+import { wallOfYard, yardOfParent } from './walls';
 import { yards } from './yard';
 
 /** A coating's data sheet. A sample is to be checked against the tin before use. */
@@ -31,7 +32,11 @@ export const sheets = pgTable(
 		/** A word for the hazards whose caution stands beside the work. */
 		hazards: text().array().notNull().default([])
 	},
-	(table) => [unique().on(table.yardId, table.name, table.version)]
+	(table) => [
+		unique().on(table.yardId, table.name, table.version),
+		// A yard is founded with its sample sheets.
+		wallOfYard(table.yardId, 'accounts')
+	]
 );
 export type SheetRow = typeof sheets.$inferSelect;
 
@@ -43,10 +48,11 @@ export const jobs = pgTable(
 		boatId: uuid()
 			.notNull()
 			.references(() => boats.id, { onDelete: 'cascade' }),
+		yardId: yardOfParent(),
 		name: text().notNull(),
 		position: integer().notNull()
 	},
-	(table) => [index().on(table.boatId)]
+	(table) => [index().on(table.boatId), wallOfYard(table.yardId)]
 );
 
 export const STEP_STATES = ['queued', 'underWay', 'curing', 'done', 'dropped'] as const;
@@ -59,6 +65,7 @@ export const steps = pgTable(
 		jobId: uuid()
 			.notNull()
 			.references(() => jobs.id, { onDelete: 'cascade' }),
+		yardId: yardOfParent(),
 		position: integer().notNull(),
 		name: text().notNull(),
 		kind: text({ enum: STEP_KINDS }).notNull(),
@@ -71,7 +78,7 @@ export const steps = pgTable(
 		state: text({ enum: STEP_STATES }).notNull().default('queued'),
 		updatedAt: timestamp({ withTimezone: true }).notNull().defaultNow()
 	},
-	(table) => [index().on(table.jobId, table.position)]
+	(table) => [index().on(table.jobId, table.position), wallOfYard(table.yardId)]
 );
 export type StepRow = typeof steps.$inferSelect;
 
@@ -81,9 +88,10 @@ export const stepFaces = pgTable(
 		stepId: uuid()
 			.notNull()
 			.references(() => steps.id, { onDelete: 'cascade' }),
+		yardId: yardOfParent(),
 		faceId: uuid()
 			.notNull()
 			.references(() => faces.id, { onDelete: 'cascade' })
 	},
-	(table) => [primaryKey({ columns: [table.stepId, table.faceId] })]
+	(table) => [primaryKey({ columns: [table.stepId, table.faceId] }), wallOfYard(table.yardId)]
 );

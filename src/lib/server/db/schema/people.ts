@@ -1,5 +1,6 @@
 import { sql } from 'drizzle-orm';
 import { integer, pgTable, text, timestamp, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
+import { wallOfAccounts, wallOfPeople, wallOfPerson } from './walls';
 
 /** A person who can sign in. */
 export const users = pgTable(
@@ -18,26 +19,37 @@ export const users = pgTable(
 			.default('°C'),
 		createdAt: timestamp({ withTimezone: true }).notNull().defaultNow()
 	},
-	(table) => [uniqueIndex('users_email_lower').on(sql`lower(${table.email})`)]
+	(table) => [
+		uniqueIndex('users_email_lower').on(sql`lower(${table.email})`),
+		wallOfPeople(table.id)
+	]
 );
 export type User = typeof users.$inferSelect;
 
 /** Signed-in devices. `id` is the SHA-256 of the token that only the cookie holds. */
-export const sessions = pgTable('sessions', {
-	id: text().primaryKey(),
-	userId: uuid()
-		.notNull()
-		.references(() => users.id, { onDelete: 'cascade' }),
-	expiresAt: timestamp({ withTimezone: true }).notNull(),
-	createdAt: timestamp({ withTimezone: true }).notNull().defaultNow(),
-	/** When the device was last heard of, within minutes, and what it called itself. */
-	lastSeenAt: timestamp({ withTimezone: true }).notNull().defaultNow(),
-	userAgent: text()
-});
+export const sessions = pgTable(
+	'sessions',
+	{
+		id: text().primaryKey(),
+		userId: uuid()
+			.notNull()
+			.references(() => users.id, { onDelete: 'cascade' }),
+		expiresAt: timestamp({ withTimezone: true }).notNull(),
+		createdAt: timestamp({ withTimezone: true }).notNull().defaultNow(),
+		/** When the device was last heard of, within minutes, and what it called itself. */
+		lastSeenAt: timestamp({ withTimezone: true }).notNull().defaultNow(),
+		userAgent: text()
+	},
+	(table) => [wallOfPerson(table.userId)]
+);
 
 /** Failed sign-ins, for the rate limit; `key` is a hash of address or e-mail. */
-export const signInAttempts = pgTable('sign_in_attempts', {
-	key: text().primaryKey(),
-	failures: integer().notNull().default(0),
-	windowStartedAt: timestamp({ withTimezone: true }).notNull().defaultNow()
-});
+export const signInAttempts = pgTable(
+	'sign_in_attempts',
+	{
+		key: text().primaryKey(),
+		failures: integer().notNull().default(0),
+		windowStartedAt: timestamp({ withTimezone: true }).notNull().defaultNow()
+	},
+	() => [wallOfAccounts()]
+);

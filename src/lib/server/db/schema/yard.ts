@@ -1,6 +1,7 @@
 import {
 	boolean,
 	doublePrecision,
+	index,
 	integer,
 	jsonb,
 	pgTable,
@@ -12,33 +13,38 @@ import {
 } from 'drizzle-orm/pg-core';
 import type { LooseSand, WorkHours } from '../../../engine';
 import { users } from './people';
+import { wallOfYard } from './walls';
 
 /** The place. Degrees, metres; speeds in m/s at 10 m; hours in the yard's own zone. */
-export const yards = pgTable('yards', {
-	id: uuid().primaryKey().defaultRandom(),
-	slug: text().notNull().unique(),
-	name: text().notNull(),
-	latitude: doublePrecision().notNull(),
-	longitude: doublePrecision().notNull(),
-	elevation: doublePrecision().notNull().default(0),
-	timeZone: text().notNull(),
-	roughness: doublePrecision().notNull().default(0.03),
-	albedo: doublePrecision().notNull().default(0.2),
-	workHours: jsonb().$type<WorkHours>().notNull(),
-	/** Null: nobody has said whether there is loose sand. */
-	looseSand: jsonb().$type<LooseSand>(),
-	liftGust: doublePrecision().notNull().default(12),
-	highWindGust: doublePrecision().notNull().default(14.4),
-	dayRate: doublePrecision(),
-	currency: text().notNull().default('EUR'),
-	/** First choice of forecast; the other stands in when it fails. */
-	forecastProvider: text({ enum: ['open-meteo', 'met-norway'] })
-		.notNull()
-		.default('open-meteo'),
-	/** True for the seeded yard, laid anew relative to today while nobody has touched it. */
-	demo: boolean().notNull().default(false),
-	createdAt: timestamp({ withTimezone: true }).notNull().defaultNow()
-});
+export const yards = pgTable(
+	'yards',
+	{
+		id: uuid().primaryKey().defaultRandom(),
+		slug: text().notNull().unique(),
+		name: text().notNull(),
+		latitude: doublePrecision().notNull(),
+		longitude: doublePrecision().notNull(),
+		elevation: doublePrecision().notNull().default(0),
+		timeZone: text().notNull(),
+		roughness: doublePrecision().notNull().default(0.03),
+		albedo: doublePrecision().notNull().default(0.2),
+		workHours: jsonb().$type<WorkHours>().notNull(),
+		/** Null: nobody has said whether there is loose sand. */
+		looseSand: jsonb().$type<LooseSand>(),
+		liftGust: doublePrecision().notNull().default(12),
+		highWindGust: doublePrecision().notNull().default(14.4),
+		dayRate: doublePrecision(),
+		currency: text().notNull().default('EUR'),
+		/** First choice of forecast; the other stands in when it fails. */
+		forecastProvider: text({ enum: ['open-meteo', 'met-norway'] })
+			.notNull()
+			.default('open-meteo'),
+		/** True for the seeded yard, laid anew relative to today while nobody has touched it. */
+		demo: boolean().notNull().default(false),
+		createdAt: timestamp({ withTimezone: true }).notNull().defaultNow()
+	},
+	(table) => [wallOfYard(table.id, 'accounts')]
+);
 export type Yard = typeof yards.$inferSelect;
 
 export const ROLES = ['manager', 'painter', 'owner'] as const;
@@ -55,7 +61,11 @@ export const memberships = pgTable(
 			.references(() => users.id, { onDelete: 'cascade' }),
 		role: text({ enum: ROLES }).notNull()
 	},
-	(table) => [primaryKey({ columns: [table.yardId, table.userId] })]
+	(table) => [
+		primaryKey({ columns: [table.yardId, table.userId] }),
+		index().on(table.userId),
+		wallOfYard(table.yardId, 'accounts')
+	]
 );
 
 /** Where a boat stands. */
@@ -69,5 +79,5 @@ export const stands = pgTable(
 		name: text().notNull(),
 		position: integer().notNull()
 	},
-	(table) => [unique().on(table.yardId, table.name)]
+	(table) => [unique().on(table.yardId, table.name), wallOfYard(table.yardId)]
 );
