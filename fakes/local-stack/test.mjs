@@ -82,7 +82,7 @@ async function main() {
 				['run', '--reporter=default', '--reporter=json', `--outputFile.json=${vitestReport}`],
 				vitestReport,
 				countVitest,
-				{ TEST_DATABASE_URL: stack.adminUrl }
+				{ TEST_DATABASE_URL: stack.adminUrl, STACK_DATA_DIR: dataFolder }
 			)
 		);
 		const browserReport = join(dataFolder, 'playwright.json');
