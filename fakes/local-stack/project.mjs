@@ -1,6 +1,14 @@
 import { spawn } from 'node:child_process';
 import { createHash } from 'node:crypto';
-import { existsSync, mkdirSync, readdirSync, readFileSync, statSync, writeFileSync } from 'node:fs';
+import {
+	existsSync,
+	lstatSync,
+	mkdirSync,
+	readdirSync,
+	readFileSync,
+	statSync,
+	writeFileSync
+} from 'node:fs';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { exclusively } from './exclusive.mjs';
@@ -71,17 +79,38 @@ async function onceFor(name, paths, made, work) {
 	});
 }
 
-/** Installs the locked dependencies unless they are there. */
-export function ensureDependencies() {
-	return onceFor(
-		'dependencies',
-		['package-lock.json'],
-		() => existsSync(join(ROOT, 'node_modules', '.package-lock.json')),
-		async () => {
-			say('Installing the locked dependencies');
-			await runToEnd('npm', ['ci', '--no-fund', '--no-audit']);
-		}
+/** Packages of a lock file by their place; the project itself is none. */
+function packagesOf(lockFile) {
+	if (!existsSync(lockFile)) return {};
+	const { packages } = JSON.parse(readFileSync(lockFile, 'utf8'));
+	delete packages[''];
+	return packages;
+}
+
+/** Whether npm last installed what the lock file says; it leaves out packages for other machines. */
+function installedAsLocked() {
+	const locked = packagesOf(join(ROOT, 'package-lock.json'));
+	const installed = packagesOf(join(ROOT, 'node_modules', '.package-lock.json'));
+	return (
+		Object.entries(locked).every(
+			([place, { version, optional, devOptional }]) =>
+				installed[place]?.version === version ||
+				(installed[place] === undefined && (optional || devOptional))
+		) && Object.keys(installed).every((place) => place in locked)
 	);
+}
+
+/** Installs the locked dependencies unless they are there. */
+export async function ensureDependencies() {
+	mkdirSync(OWN_FOLDER, { recursive: true });
+	await exclusively(join(OWN_FOLDER, 'dependencies.lock'), async () => {
+		if (installedAsLocked()) return;
+		// An install empties the folder first, and a link leads to one that others work with.
+		if (lstatSync(join(ROOT, 'node_modules'), { throwIfNoEntry: false })?.isSymbolicLink())
+			throw new Error('node_modules is a link to other dependencies than the locked ones.');
+		say('Installing the locked dependencies');
+		await runToEnd('npm', ['ci', '--no-fund', '--no-audit']);
+	});
 }
 
 /** Builds the web process unless the build is of these sources. */
