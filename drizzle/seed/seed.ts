@@ -1,4 +1,4 @@
-import { eq } from 'drizzle-orm';
+import { eq, sql } from 'drizzle-orm';
 import { FACE_ORIENTATIONS, localDate } from '../../src/lib/engine';
 import { hashPassword } from '../../src/lib/server/access/passwords';
 import type { Database } from '../../src/lib/server/db/client';
@@ -168,6 +168,8 @@ async function isTouched(tx: Transaction, yardId: string, laidAt: Date): Promise
 export async function seedDemo(db: Database, now: Date): Promise<'laid' | 'renewed' | 'left'> {
 	const today = localDate(DEMO_YARD.timeZone, Math.floor(now.getTime() / 1000));
 	return db.transaction(async (tx) => {
+		// Nobody laid it: the record begins with what people do.
+		await tx.execute(sql`select set_config('app.unrecorded', 'yes', true)`);
 		const [demo] = await tx.select().from(yards).where(eq(yards.demo, true));
 		if (demo === undefined) {
 			const [any] = await tx.select({ id: yards.id }).from(yards).limit(1);

@@ -39,7 +39,7 @@ const USUAL_FACES: readonly {
 export function usualFaces(
 	hull: Hull,
 	colour: Colour
-): Omit<FaceRow, 'id' | 'boatId' | 'yardId'>[] {
+): Omit<FaceRow, 'id' | 'boatId' | 'yardId' | 'revision'>[] {
 	return USUAL_FACES.flatMap(({ name, sides, material, finish }) => {
 		const { tilt, bearing, bothSides } = FACE_ORIENTATIONS[name];
 		const below = ['bottom', 'keel', 'rudder', 'driveLeg', 'propeller'].includes(name);

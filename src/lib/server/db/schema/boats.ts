@@ -12,6 +12,7 @@ import {
 } from 'drizzle-orm/pg-core';
 import { FACE_NAMES, FINISHES, MATERIALS } from '../../../engine';
 import { users } from './people';
+import { revision } from './revision';
 import { wallOfYard, yardOfParent } from './walls';
 import { stands, yards } from './yard';
 
@@ -28,7 +29,8 @@ export const boats = pgTable(
 		name: text().notNull(),
 		heading: doublePrecision().notNull(),
 		hauledOn: date({ mode: 'string' }),
-		launchBy: date({ mode: 'string' })
+		launchBy: date({ mode: 'string' }),
+		revision: revision()
 	},
 	(table) => [
 		index().on(table.yardId),
@@ -82,7 +84,8 @@ export const faces = pgTable(
 		inside: jsonb().$type<{ u: number; temperature?: number }>(),
 		bothSides: boolean().notNull().default(false),
 		/** m² */
-		area: doublePrecision()
+		area: doublePrecision(),
+		revision: revision()
 	},
 	(table) => [unique().on(table.boatId, table.name, table.side), wallOfYard(table.yardId)]
 );

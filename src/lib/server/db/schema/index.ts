@@ -4,4 +4,5 @@ export * from './yard';
 export * from './boats';
 export * from './jobs';
 export * from './forecasts';
+export * from './changes';
 export * from './workers';

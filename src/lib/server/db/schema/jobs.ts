@@ -13,6 +13,7 @@ import {
 } from 'drizzle-orm/pg-core';
 import { METHODS, SHELTERS, STEP_KINDS, type Limits, type Times } from '../../../engine';
 import { boats, faces } from './boats';
+import { revision } from './revision';
 import { wallOfYard, yardOfParent } from './walls';
 import { yards } from './yard';
 
@@ -30,7 +31,8 @@ export const sheets = pgTable(
 		limits: jsonb().$type<Limits>().notNull(),
 		times: jsonb().$type<Times>().notNull(),
 		/** A word for the hazards whose caution stands beside the work. */
-		hazards: text().array().notNull().default([])
+		hazards: text().array().notNull().default([]),
+		revision: revision()
 	},
 	(table) => [
 		unique().on(table.yardId, table.name, table.version),
@@ -50,7 +52,8 @@ export const jobs = pgTable(
 			.references(() => boats.id, { onDelete: 'cascade' }),
 		yardId: yardOfParent(),
 		name: text().notNull(),
-		position: integer().notNull()
+		position: integer().notNull(),
+		revision: revision()
 	},
 	(table) => [index().on(table.boatId), wallOfYard(table.yardId)]
 );
@@ -76,7 +79,8 @@ export const steps = pgTable(
 		times: jsonb().$type<Times>().notNull().default({}),
 		shelter: text({ enum: SHELTERS }).notNull().default('open'),
 		state: text({ enum: STEP_STATES }).notNull().default('queued'),
-		updatedAt: timestamp({ withTimezone: true }).notNull().defaultNow()
+		updatedAt: timestamp({ withTimezone: true }).notNull().defaultNow(),
+		revision: revision()
 	},
 	(table) => [index().on(table.jobId, table.position), wallOfYard(table.yardId)]
 );

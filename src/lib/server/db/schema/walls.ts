@@ -51,5 +51,9 @@ export const wallOfAccounts = () => wall(onDuty('accounts'));
 export const wallOfPost = () =>
 	pgPolicy('web_wall', { for: 'insert', to: webRole, withCheck: sql`true` });
 
+/** What is written down of a yard for good: its people read it, triggers alone write it. */
+export const wallOfRecord = (yardId: AnyPgColumn) =>
+	pgPolicy('web_wall', { for: 'select', to: webRole, using: sql`${yardId} in ${YARDS}` });
+
 /** Rows that hold nothing of anybody. */
 export const noWall = () => wall(sql`true`);

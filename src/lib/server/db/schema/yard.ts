@@ -13,6 +13,7 @@ import {
 } from 'drizzle-orm/pg-core';
 import type { LooseSand, WorkHours } from '../../../engine';
 import { users } from './people';
+import { revision } from './revision';
 import { wallOfYard } from './walls';
 
 /** The place. Degrees, metres; speeds in m/s at 10 m; hours in the yard's own zone. */
@@ -41,7 +42,8 @@ export const yards = pgTable(
 			.default('open-meteo'),
 		/** True for the seeded yard, laid anew relative to today while nobody has touched it. */
 		demo: boolean().notNull().default(false),
-		createdAt: timestamp({ withTimezone: true }).notNull().defaultNow()
+		createdAt: timestamp({ withTimezone: true }).notNull().defaultNow(),
+		revision: revision()
 	},
 	(table) => [wallOfYard(table.id, 'accounts')]
 );
@@ -77,7 +79,8 @@ export const stands = pgTable(
 			.notNull()
 			.references(() => yards.id, { onDelete: 'cascade' }),
 		name: text().notNull(),
-		position: integer().notNull()
+		position: integer().notNull(),
+		revision: revision()
 	},
 	(table) => [unique().on(table.yardId, table.name), wallOfYard(table.yardId)]
 );
