@@ -42,7 +42,14 @@ export {
 	type SlotGrid,
 	type SlotWeather
 } from './outlook/weather/slots';
-export { stepSchema, usualErrorsSchema, type Step, type UsualErrors } from './outlook/hours/step';
+export {
+	closedSpansSchema,
+	stepSchema,
+	usualErrorsSchema,
+	type ClosedSpans,
+	type Step,
+	type UsualErrors
+} from './outlook/hours/step';
 export {
 	LIMIT_NAMES,
 	LIMIT_UNITS,

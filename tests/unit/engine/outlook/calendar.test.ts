@@ -10,6 +10,8 @@ import { SITE } from './flatWeather';
 
 const epoch = (text: string): number => Date.parse(text) / 1000;
 
+const marked = (mask: Uint8Array): number => mask.reduce((a, b) => a + b, 0);
+
 describe('local days', () => {
 	test('the spring change makes a day of 92 slots and the autumn one of 100', () => {
 		const spring = localDays('Europe/Lisbon', epoch('2026-03-28T12:00:00Z'), 3);
@@ -53,10 +55,14 @@ describe('local days', () => {
 
 describe('work hours', () => {
 	const grid = { start: epoch('2026-03-29T00:00:00Z'), count: 96 };
-	const marked = (mask: Uint8Array): number => mask.reduce((a, b) => a + b, 0);
 
 	test('on the day of a change they stay at the clock’s times', () => {
-		const mask = workMask('Europe/Lisbon', [{ days: [7], from: '08:00', to: '12:00' }], grid);
+		const mask = workMask(
+			'Europe/Lisbon',
+			[{ days: [7], from: '08:00', to: '12:00' }],
+			undefined,
+			grid
+		);
 		// 08:00 is 07:00 UTC once summer time has come.
 		expect(mask[28]).toBe(1);
 		expect(mask[27]).toBe(0);
@@ -64,12 +70,17 @@ describe('work hours', () => {
 	});
 
 	test('hours from before the change run shorter by the hour that is missing', () => {
-		const mask = workMask('Europe/Lisbon', [{ days: [7], from: '00:00', to: '06:00' }], grid);
+		const mask = workMask(
+			'Europe/Lisbon',
+			[{ days: [7], from: '00:00', to: '06:00' }],
+			undefined,
+			grid
+		);
 		expect(marked(mask)).toBe(20);
 	});
 
 	test('a slot that an entry does not fill is out, and entries that meet are one', () => {
-		const part = workMask('UTC', [{ days: [7], from: '08:05', to: '08:40' }], grid);
+		const part = workMask('UTC', [{ days: [7], from: '08:05', to: '08:40' }], undefined, grid);
 		expect(marked(part)).toBe(1);
 		const joined = workMask(
 			'UTC',
@@ -77,9 +88,31 @@ describe('work hours', () => {
 				{ days: [7], from: '08:00', to: '08:50' },
 				{ days: [7], from: '08:50', to: '09:15' }
 			],
+			undefined,
 			grid
 		);
 		expect(marked(joined)).toBe(5);
+	});
+});
+
+describe('spans closed', () => {
+	const grid = { start: epoch('2026-05-04T00:00:00Z'), count: 96 };
+	const at = (hour: number) => grid.start + hour * 3600;
+
+	test('take away every slot they touch, from work hours and from all hours', () => {
+		const touched = [{ from: at(8) + 60, to: at(9) + 60 }];
+		expect(marked(workMask('UTC', undefined, touched, grid))).toBe(96 - 5);
+		const worked = workMask('UTC', [{ days: [1], from: '08:00', to: '10:00' }], touched, grid);
+		expect(marked(worked)).toBe(3);
+	});
+
+	test('before, past or at the edges of the grid take nothing they do not touch', () => {
+		const spans = [
+			{ from: at(-5), to: at(0) },
+			{ from: at(24), to: at(30) },
+			{ from: at(23), to: at(40) }
+		];
+		expect(marked(workMask('UTC', undefined, spans, grid))).toBe(92);
 	});
 });
 

@@ -303,3 +303,13 @@ describe('usual errors', () => {
 		expect(STATES[hours.state[slotAt(80)]]).toBe('tight');
 	});
 });
+
+test('a day off shuts its hours, by the word of hours', () => {
+	const closed = [{ from: START + 24 * HOUR, to: START + 48 * HOUR }];
+	const step = { ...COAT, limits: {}, times: { touchDry: 60 } };
+	const free = stepHours(step, conditionsOf(), SITE);
+	const shut = stepHours({ ...step, closed }, conditionsOf(), SITE);
+	expect(at(free, 30)).toMatch(/^open/);
+	expect(at(shut, 30)).toBe('shut hours');
+	expect(shut.state.subarray(0, slotAt(23))).toEqual(free.state.subarray(0, slotAt(23)));
+});

@@ -23,5 +23,13 @@ export const LIFTING_TASKS = [
 	{ code: 'haul', kind: 'lift', ...LIGHT_WINDAGE },
 	{ code: 'haulHighWindage', kind: 'lift', ...HIGH_WINDAGE },
 	{ code: 'launch', kind: 'launch', ...LIGHT_WINDAGE },
-	{ code: 'launchHighWindage', kind: 'launch', ...HIGH_WINDAGE }
+	{ code: 'launchHighWindage', kind: 'launch', ...HIGH_WINDAGE },
+	{
+		...HIGH_WINDAGE,
+		code: 'shiftPads',
+		kind: 'fit',
+		isYardOnly: true,
+		source:
+			'default, no source: as lifting a boat of much windage; how stands are shifted is the yard’s rule and the stand maker’s'
+	}
 ] as const satisfies readonly Task[];

@@ -12,6 +12,8 @@ export interface Task {
 	/** Wind to be careful from, m/s at the limits' wind height, where one is usual. */
 	readonly caution?: { readonly wind?: number; readonly gust?: number };
 	readonly times?: Times;
+	/** Done by the yard’s own people only. */
+	readonly isYardOnly?: true;
 	/** Hazards whose caution stands beside the work, worst first. */
 	readonly hazards: readonly Hazard[];
 	/** Where the numbers come from: a publication, or "common practice". */

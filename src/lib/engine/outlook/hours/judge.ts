@@ -50,14 +50,15 @@ function remember(site: Site, key: string, make: () => Uint8Array): Uint8Array {
 }
 
 /** Work hours and daylight of a step over a grid. */
-export function stepMasks({ workHours, limits }: Step, site: Site, grid: SlotGrid): StepMasks {
+export function stepMasks(step: Step, site: Site, grid: SlotGrid): StepMasks {
+	const { workHours, closed, limits } = step;
 	const span = `${grid.start} ${grid.count}`;
 	return {
 		work:
-			workHours === undefined
+			workHours === undefined && closed === undefined
 				? null
-				: remember(site, `work ${span} ${JSON.stringify(workHours)}`, () =>
-						workMask(site.timeZone, workHours, grid)
+				: remember(site, `work ${span} ${JSON.stringify([workHours, closed])}`, () =>
+						workMask(site.timeZone, workHours, closed, grid)
 					),
 		daylight:
 			limits.daylight === true

@@ -4,7 +4,20 @@ import { timesSchema } from '../../coating/times';
 import { METHODS, STEP_KINDS } from '../../vocabulary';
 import { workHoursSchema } from '../weather/site';
 
-/** One step as the engine judges it. `workHours` absent: no hours limit; empty: never. */
+/** Spans in which nobody works: holidays, absences. UTC epoch seconds, [from, to). */
+export const closedSpansSchema = z
+	.array(
+		z
+			.strictObject({ from: z.int(), to: z.int() })
+			.refine(({ from, to }) => from < to, { error: 'must end after it begins' })
+	)
+	.max(2_000);
+export type ClosedSpans = z.infer<typeof closedSpansSchema>;
+
+/**
+ * One step as the engine judges it. `workHours` absent: no hours limit; empty: never. `closed` takes
+ * hours away from them, or from all hours.
+ */
 export const stepSchema = z.strictObject({
 	name: z.string().max(200),
 	kind: z.enum(STEP_KINDS),
@@ -14,6 +27,7 @@ export const stepSchema = z.strictObject({
 		.max(14 * 1440),
 	method: z.enum(METHODS),
 	workHours: workHoursSchema.optional(),
+	closed: closedSpansSchema.optional(),
 	limits: limitsSchema,
 	times: timesSchema
 });

@@ -33,6 +33,7 @@ export function abradingBefore({ step, faces }: JobStep, sanding: Task): JobStep
 			durationMinutes: step.durationMinutes,
 			method: 'none',
 			...(step.workHours === undefined ? {} : { workHours: step.workHours }),
+			...(step.closed === undefined ? {} : { closed: step.closed }),
 			limits: { ...sanding.limits, ...(step.limits.daylight === true ? { daylight: true } : {}) },
 			times: sanding.times ?? {}
 		}

@@ -94,8 +94,33 @@ export function daylightMask(
 	return mask;
 }
 
+/** Takes the mark off every slot that a span touches. */
+function unmarkTouched(grid: SlotGrid, spans: readonly TimeSpan[], mask: Uint8Array): void {
+	for (const span of spans) {
+		const first = Math.max(0, Math.floor((span.from - grid.start) / SLOT_SECONDS));
+		const end = Math.min(grid.count, Math.ceil((span.to - grid.start) / SLOT_SECONDS));
+		if (end > first) mask.fill(0, first, end);
+	}
+}
+
+/**
+ * 1 for slots wholly inside work hours of the site's zone (all slots without any) and outside every
+ * span closed.
+ */
+export function workMask(
+	timeZone: string,
+	hours: WorkHours | undefined,
+	closed: readonly TimeSpan[] | undefined,
+	grid: SlotGrid
+): Uint8Array {
+	const mask =
+		hours === undefined ? new Uint8Array(grid.count).fill(1) : weeklyMask(timeZone, hours, grid);
+	unmarkTouched(grid, closed ?? [], mask);
+	return mask;
+}
+
 /** 1 for slots wholly inside work hours of the site's zone. */
-export function workMask(timeZone: string, hours: WorkHours, grid: SlotGrid): Uint8Array {
+function weeklyMask(timeZone: string, hours: WorkHours, grid: SlotGrid): Uint8Array {
 	const mask = new Uint8Array(grid.count);
 	if (hours.length === 0) return mask;
 	const days = Math.ceil((grid.count * SLOT_SECONDS) / DAY_SECONDS) + 3;

@@ -40,6 +40,12 @@ describe('TASKS', () => {
 		);
 	});
 
+	test('only the yard’s own people shift the pads of a stand', () => {
+		expect(TASKS.filter(({ isYardOnly }) => isYardOnly).map(({ code }) => code)).toEqual([
+			'shiftPads'
+		]);
+	});
+
 	test.each(TASKS.map((task) => [task.code, task] as const))(
 		'%s is a valid rule of the engine’s own words',
 		(_, task) => {
