@@ -81,7 +81,13 @@ export const outlookRequestSchema = z.strictObject({
 	to: instantSchema.optional(),
 	steps: z.array(stepRequestSchema).min(1).max(MOST_STEPS),
 	launchBy: instantSchema.optional(),
-	launchSlots: z.array(instantSchema).max(2_000).optional(),
+	launchSlots: z
+		.array(instantSchema)
+		.max(2_000)
+		.optional()
+		.describe(
+			'Bookable times of the hoist. Where any are stated, a step of kind `launch` starts at one of them and at no other time, in every plan; its `state`, `stretches` and `best` are weather and hours alone. Without slots it may start in any workable quarter-hour.'
+		),
 	dayRate: launchWishSchema.shape.dayRate,
 	currency: z.string().max(20).optional()
 });

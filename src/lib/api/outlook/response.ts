@@ -87,7 +87,7 @@ const planSchema = z.object({
 		/** After which the last coat has stood ashore too long. */
 		closes: instant.nullable()
 	}),
-	/** The first launch it can make, and the whole days and money it slips. */
+	/** The start of its launch step, without one the first launch it can make; whole days and money it slips. */
 	launch: instant.nullable(),
 	slipDays: z.int().nullable(),
 	costOfSlip: z.number().nullable()
@@ -109,6 +109,8 @@ export const outlookResponseSchema = z.object({
 			/** Workable hours left. */
 			hours: z.number().nullable(),
 			hasStarts: z.boolean().nullable(),
+			/** Launch slots ahead, inside the forecast. */
+			slots: z.int().min(0).nullable(),
 			opens: instant.nullable(),
 			closes: instant.nullable(),
 			launch: instant.nullable(),

@@ -51,6 +51,7 @@ export function tellWarning(warning: Warning): OutlookResponse['warnings'][numbe
 		after: 'after' in told ? told.after : null,
 		hours: 'hours' in told ? told.hours : null,
 		hasStarts: 'hasStarts' in told ? told.hasStarts : null,
+		slots: 'slots' in told ? told.slots : null,
 		opens: instant('opens' in told ? told.opens : null),
 		closes: instant('closes' in told ? told.closes : null),
 		launch: instant('launch' in told ? told.launch : null),

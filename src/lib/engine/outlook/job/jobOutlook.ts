@@ -1,6 +1,5 @@
 import type { UsualErrors } from '../hours/step';
 import { yardErrors } from '../members/memberErrors';
-import { positionOf } from '../plan/launch';
 import type { Plans } from '../plan/plan';
 import { plansOf } from '../plan/plans';
 import type { YardWeather } from '../weather/yardWeather';
@@ -43,9 +42,8 @@ export function jobOutlook(
 	{ from, usualErrors }: JobOptions
 ): JobOutlook {
 	const faces = faceOutlooks(yard, errorsOfYard(yard, usualErrors));
-	const judge = stepOutlooks(yard, faces, from);
+	const judge = stepOutlooks(yard, faces, from, job.launch);
 	const steps = job.steps.map(judge);
 	const plans = plansOf(yard, job, steps, judge);
-	const firstSlot = Math.ceil(positionOf(yard.weather.grid, from) - 1e-9);
-	return { steps, plans, warnings: warningsOf(yard, job, steps, plans, firstSlot) };
+	return { steps, plans, warnings: warningsOf(yard, job, steps, plans, from) };
 }

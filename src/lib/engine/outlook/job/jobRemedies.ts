@@ -25,6 +25,7 @@ export function jobRemedies(
 	{ shelters, from, end }: RemedyOptions
 ): (Remedy & { readonly step: number })[] {
 	const { weather, site } = yard;
+	const notBefore = positionOf(weather.grid, from);
 	const known = new Map<string, FaceConditions[]>();
 	const under = (outlook: StepOutlook, shelter: ShelterName): FaceConditions[] =>
 		outlook.faces.flatMap(({ under: { face, readings = [] }, id }) => {
@@ -37,6 +38,7 @@ export function jobRemedies(
 		});
 	return steps.flatMap((outlook, step) => {
 		if (outlook.planStep.isFixed) return [];
+		const { launchSlots, duration } = outlook.planStep;
 		const stands = outlook.faces.map((face) => face.under.shelter);
 		return remediesOf({
 			step: outlook.step,
@@ -47,7 +49,11 @@ export function jobRemedies(
 			shelters: shelters
 				.filter((shelter) => !stands.includes(shelter))
 				.map((shelter) => ({ shelter, conditions: under(outlook, shelter) })),
-			from: Math.max(0, Math.ceil(positionOf(weather.grid, from) - 1e-9)),
+			kept:
+				launchSlots === null
+					? null
+					: { starts: launchSlots.filter((slot) => slot >= notBefore), duration },
+			from: Math.max(0, Math.ceil(notBefore - 1e-9)),
 			to: end ?? weather.grid.count
 		}).map((remedy) => ({ ...remedy, step }));
 	});

@@ -4,7 +4,7 @@ import type { Step } from '../hours/step';
 import { stepChances, type StepChances } from '../members/chances';
 import { fixedStart, startsOf } from '../plan/candidates';
 import { launchReadyAfter } from '../plan/launchReady';
-import { positionOf } from '../plan/launch';
+import { launchPositions, positionOf, type LaunchWish } from '../plan/launch';
 import { waitsForLaunchReady, type PlanStep } from '../plan/planStep';
 import { SLOT_SECONDS } from '../weather/slots';
 import type { YardWeather } from '../weather/yardWeather';
@@ -30,11 +30,15 @@ const OPEN_GROUND: FaceUnder = {
 
 const SLOT_MINUTES = SLOT_SECONDS / 60;
 
-/** Judges steps of a yard, those alike once: hours and chances do not depend on what comes before. */
+/**
+ * Judges steps of a yard, those alike once: hours and chances do not depend on what comes before.
+ * A launch keeps to the slots of the wish, where it states any.
+ */
 export function stepOutlooks(
 	yard: YardWeather,
 	faceOf: (under: FaceUnder) => FaceOutlook,
-	from: number
+	from: number,
+	wish: LaunchWish = {}
 ) {
 	const { site, weather } = yard;
 	const judged = new Map<string, { hours: StepHours; chances: StepChances | null }>();
@@ -57,7 +61,8 @@ export function stepOutlooks(
 		judged.set(key, result);
 		return result;
 	};
-	const firstStart = Math.ceil(positionOf(weather.grid, from) - 1e-9);
+	const notBefore = positionOf(weather.grid, from);
+	const slots = launchPositions(weather.grid, wish);
 	return ({ step, faces: under, startAt, finishedAt }: JobStep): StepOutlook => {
 		const faces = (under.length > 0 ? under : [OPEN_GROUND]).map(faceOf);
 		// The name says nothing of the hours.
@@ -65,9 +70,10 @@ export function stepOutlooks(
 		const { hours, chances } = judge(step, faces, key);
 		const isFixed = startAt !== undefined;
 		const duration = step.durationMinutes / SLOT_MINUTES;
+		const launchSlots = step.kind === 'launch' ? slots : null;
 		const starts =
 			startAt === undefined
-				? startsOf(hours, chances, firstStart, duration)
+				? startsOf(hours, chances, { notBefore, duration, only: launchSlots })
 				: fixedStart(
 						positionOf(weather.grid, startAt),
 						finishedAt === undefined
@@ -82,7 +88,7 @@ export function stepOutlooks(
 			faces,
 			hours,
 			chances,
-			planStep: { step, faces, candidates: { ...starts, ready }, isFixed, duration }
+			planStep: { step, faces, candidates: { ...starts, ready }, isFixed, duration, launchSlots }
 		};
 	};
 }

@@ -1,6 +1,7 @@
 import { SLOT_SECONDS } from '../weather/slots';
 import type { YardWeather } from '../weather/yardWeather';
-import { chosenLaunch, instantAt } from '../plan/launch';
+import { workedSlots } from '../plan/candidates';
+import { chosenLaunch, instantAt, positionOf } from '../plan/launch';
 import { launchTable } from '../plan/launchReady';
 import { soonest } from '../plan/objectives';
 import { gapsOf } from '../plan/gaps';
@@ -41,6 +42,8 @@ export type Warning =
 	  }
 	/** Launch slots are stated, none in time. */
 	| { readonly code: 'noLaunchSlot'; readonly launchBy: number }
+	/** None of the launch slots ahead, inside the forecast, is workable for the launch itself. */
+	| { readonly code: 'launchSlotsShut'; readonly step: number; readonly slots: number }
 	/** The first launch the soonest plan can make is later than its last coat may stand ashore. */
 	| { readonly code: 'ashoreTooLong'; readonly launch: number; readonly closes: number }
 	/** A recoat window is missed: the plan puts an abrading in before this step. */
@@ -57,6 +60,7 @@ export const WARNING_CODES = [
 	'nothingFits',
 	'nothingBeforeLaunch',
 	'noLaunchSlot',
+	'launchSlotsShut',
 	'ashoreTooLong',
 	'abradingPutIn',
 	'silentMaximum',
@@ -78,6 +82,28 @@ function firstOutOfReach(steps: readonly PlanStep[]): number | null {
 	return null;
 }
 
+/** Whether a slot is worked from one of some starts. */
+const isWorked = (slot: number, starts: Float64Array, duration: number): boolean =>
+	starts.some((start) => {
+		const { first, end } = workedSlots(start, start + duration);
+		return first <= slot && slot < end;
+	});
+
+/** Launches that keep to slots, of which none is workable. */
+function shutSlots(
+	{ weather: { grid, knownTo } }: YardWeather,
+	outlooks: readonly StepOutlook[],
+	from: number
+): Warning[] {
+	return outlooks.flatMap(({ planStep }, step): Warning[] => {
+		const { launchSlots, isFixed, candidates } = planStep;
+		if (isFixed || launchSlots === null || candidates.start.length > 0) return [];
+		const notBefore = positionOf(grid, from);
+		const ahead = launchSlots.filter((slot) => slot >= notBefore && slot < knownTo);
+		return [{ code: 'launchSlotsShut', step, slots: ahead.length }];
+	});
+}
+
 function windowWarnings(
 	{ weather: { grid } }: YardWeather,
 	outlooks: readonly StepOutlook[],
@@ -89,7 +115,7 @@ function windowWarnings(
 		if (steps[step].isFixed || !steps.slice(0, step).every((it) => it.isFixed)) return [];
 		const window = startWindow(steps, step);
 		if (window === null || !Number.isFinite(window.closes)) return [];
-		const { duration, candidates } = steps[step];
+		const { duration, candidates, launchSlots } = steps[step];
 		const inside = candidates.start.filter(
 			(start) => start >= window.opens - 1e-6 && start <= window.closes + 1e-6
 		);
@@ -105,7 +131,12 @@ function windowWarnings(
 			];
 		let workable = 0;
 		for (let slot = Math.max(0, firstSlot); slot < hours.state.length; slot++)
-			if (hours.state[slot] !== 0 && placeInWindow(window, slot, duration) === 'inside') workable++;
+			if (
+				hours.state[slot] !== 0 &&
+				placeInWindow(window, slot, duration) === 'inside' &&
+				(launchSlots === null || isWorked(slot, inside, duration))
+			)
+				workable++;
 		const left = workable * HOURS_PER_SLOT;
 		const closes = instantAt(grid, window.closes);
 		return left < FEW_HOURS && closes !== null
@@ -154,14 +185,19 @@ function launchWarnings(job: Job, plans: Plans): Warning[] {
 	];
 }
 
-/** The warnings of a job, in the order of what is lost first. */
+/**
+ * The warnings of a job, in the order of what is lost first.
+ *
+ * @param from - UTC epoch seconds; no start before it
+ */
 export function warningsOf(
 	yard: YardWeather,
 	job: Job,
 	outlooks: readonly StepOutlook[],
 	plans: Plans,
-	firstSlot: number
+	from: number
 ): Warning[] {
+	const firstSlot = Math.ceil(positionOf(yard.weather.grid, from) - 1e-9);
 	const breaksAt =
 		plans.soonest === null ? firstOutOfReach(outlooks.map((it) => it.planStep)) : null;
 	const putIn = (plans.soonest?.steps ?? []).flatMap(({ step }, i, all): Warning[] => {
@@ -173,6 +209,7 @@ export function warningsOf(
 			hours.silentDrying ? [{ code: 'silentDrying', step }] : []
 		),
 		...windowWarnings(yard, outlooks, firstSlot),
+		...shutSlots(yard, outlooks, from),
 		...(breaksAt === null
 			? []
 			: [

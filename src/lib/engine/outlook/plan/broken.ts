@@ -11,10 +11,14 @@ export interface BrokenStep {
 	readonly why: Limiter;
 }
 
+/** Whether a start is at one of the launch slots, where its step keeps to them. */
+const keepsToSlots = ({ launchSlots }: PlanStep, start: number): boolean =>
+	launchSlots?.some((slot) => Math.abs(slot - start) <= POSITION_ROUNDING) ?? true;
+
 /**
  * What of a plan no longer holds in the forecast at hand: steps whose slots are no longer all
- * workable, and starts that now lie before or after what the steps before them allow. Empty where
- * all of it holds. A plan that was taken is judged by this, and so is one moved by hand.
+ * workable, launches whose slot is no longer stated (`hours`), and starts that now lie before or
+ * after what the steps before them allow. Empty where all of it holds. A plan that was taken is judged by this, and so is one moved by hand.
  *
  * @param places - slot positions of each step's start and finish
  */
@@ -31,6 +35,10 @@ export function brokenSteps(
 	steps.forEach(({ hours, planStep }, step) => {
 		if (planStep.isFixed) return;
 		const { start, finish } = places[step];
+		if (!keepsToSlots(planStep, start)) {
+			broken.push({ step, why: 'hours' });
+			return;
+		}
 		const end = Math.ceil(finish - POSITION_ROUNDING);
 		for (let slot = Math.floor(start + POSITION_ROUNDING); slot < end; slot++) {
 			if (hours.state[slot] !== 0) continue;

@@ -4,7 +4,8 @@ import { SLOT_SECONDS } from '../weather/slots';
 import type { YardWeather } from '../weather/yardWeather';
 import { holdChance } from './hold';
 import { nextBounds } from './inverse';
-import { instantAt, slipOf, type LaunchWish } from './launch';
+import { bindingStart } from './candidates';
+import { instantAt, slipAt, slipOf, type LaunchWish } from './launch';
 import { launchClosesAfter, launchReadyAfter } from './launchReady';
 import type { RankedWay } from './objectives';
 import type { LaunchReady, Plan, PlannedStep } from './plan';
@@ -33,7 +34,9 @@ function plannedStep(
 		finish: grid.start + finish * SLOT_SECONDS,
 		isFixed,
 		room: isFixed ? null : candidates.room[taken],
-		limiter: isFixed ? null : LIMITERS[hours.limiter[hours.bindsAt[start]]],
+		limiter: isFixed
+			? null
+			: LIMITERS[hours.limiter[hours.bindsAt[bindingStart(hours, start, finish)]]],
 		earliestNext: instantAt(grid, next.earliest),
 		latestNext: instantAt(grid, next.latest)
 	};
@@ -65,6 +68,14 @@ function launchReadyOf(
 	};
 }
 
+const isLaunch = ({ outlook }: ChainStep): boolean => outlook.step.kind === 'launch';
+
+/** Where the boat goes in: the start of its last launch. */
+function launchedAt(steps: readonly ChainStep[], starts: Int32Array): number {
+	const last = steps.findLastIndex(isLaunch);
+	return steps[last].outlook.planStep.candidates.start[starts[last]];
+}
+
 /** A way through a chain told as a plan. */
 export function planOf(
 	yard: YardWeather,
@@ -74,6 +85,7 @@ export function planOf(
 ): Plan {
 	const { grid } = yard.weather;
 	const { position, ...launchReady } = launchReadyOf(steps, way.starts, yard);
+	const launches = steps.some(isLaunch);
 	const held = steps.map(({ outlook: { chances, faces } }) => ({
 		masks: chances?.masks ?? [],
 		faces: yard.members.map((_, member) => faces.map((face) => face.members[member]))
@@ -88,6 +100,8 @@ export function planOf(
 			way.starts
 		),
 		launchReady,
-		slip: slipOf(wish, yard.site.timeZone, grid.start + position * SLOT_SECONDS)
+		slip: launches
+			? slipAt(wish, yard.site.timeZone, instantAt(grid, launchedAt(steps, way.starts)))
+			: slipOf(wish, yard.site.timeZone, grid.start + position * SLOT_SECONDS)
 	};
 }

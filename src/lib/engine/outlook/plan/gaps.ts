@@ -74,7 +74,8 @@ function isImplied(gap: Gap, gaps: readonly Gap[], steps: readonly PlanStep[]): 
 	if (to - from < 2 || latest.some((it) => it < Infinity)) return false;
 	const between = steps.slice(from + 1, to);
 	if (between.some((it) => it.isFixed)) return false;
-	const work = between.reduce((sum, it) => sum + Math.ceil(it.duration), 0);
+	// Exact, not in whole slots: a fixed step and a launch slot may begin at any minute.
+	const work = between.reduce((sum, it) => sum + it.duration, 0);
 	return gaps.some(
 		(first) =>
 			first.from === from &&

@@ -86,7 +86,7 @@ export function holdChance(
 		const isWorkable = steps.every(({ isFixed }, i) => {
 			if (isFixed) return true;
 			const end = Math.ceil(placed[i].finish - ROUNDING);
-			for (let slot = placed[i].start; slot < end; slot++)
+			for (let slot = Math.floor(placed[i].start + ROUNDING); slot < end; slot++)
 				if (held[i].masks[member][slot] !== 1) return false;
 			return true;
 		});

@@ -54,15 +54,26 @@ export interface Slip {
 
 /** The slip of a plan that is launch-ready at an instant (UTC epoch seconds, +Infinity for never). */
 export function slipOf(wish: LaunchWish, timeZone: string, ready: number): Slip {
-	const launch = firstLaunch(wish, ready);
+	const chosen = chosenLaunch(wish);
+	const launch = chosen !== null && ready <= chosen ? chosen : firstLaunch(wish, ready);
+	return slipAt(wish, timeZone, launch);
+}
+
+/** The slip of a launch at an instant (UTC epoch seconds); null where none can be made. */
+export function slipAt(wish: LaunchWish, timeZone: string, launch: number | null): Slip {
 	const aim = chosenLaunch(wish) ?? wish.launchBy;
-	if (aim === undefined) return { launch, days: null, cost: null };
-	const days = ready <= aim ? 0 : launch === null ? null : daysBetween(timeZone, aim, launch);
-	return {
-		launch: ready <= aim ? aim : launch,
-		days,
-		cost: days === null || wish.dayRate === undefined ? null : days * wish.dayRate
-	};
+	if (aim === undefined || launch === null) return { launch, days: null, cost: null };
+	const days = daysBetween(timeZone, aim, launch);
+	return { launch, days, cost: wish.dayRate === undefined ? null : days * wish.dayRate };
+}
+
+/**
+ * Slot positions of the launch slots stated, rising, each once; null where none are. Fractions are
+ * kept: a slot may begin at any minute.
+ */
+export function launchPositions(grid: SlotGrid, { launchSlots }: LaunchWish): Float64Array | null {
+	if (launchSlots === undefined || launchSlots.length === 0) return null;
+	return Float64Array.from(new Set(launchSlots), (slot) => positionOf(grid, slot)).sort();
 }
 
 /** An instant as a slot position of a grid. */

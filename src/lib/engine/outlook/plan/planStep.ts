@@ -20,6 +20,8 @@ export interface PlanStep {
 	readonly isFixed: boolean;
 	/** Exact length of the work in slots. */
 	readonly duration: number;
+	/** Positions of the launch slots it keeps to, rising; null for a step that keeps to none. */
+	readonly launchSlots: Float64Array | null;
 }
 
 /** Steps that lay something that has to cure before the next of them. */

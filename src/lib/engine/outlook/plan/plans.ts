@@ -15,10 +15,12 @@ import { isCoat } from './planStep';
 /** Starts that meet a launch at a slot position: not so early that a coat stands ashore too long. */
 function launchAllows(steps: readonly ChainStep[], launch: number): (Uint8Array | null)[] {
 	const last = steps.findLastIndex(({ outlook }) => isCoat(outlook.step.kind));
+	// A launch among the steps has its own wait and end; without one the boat goes in at the slot.
+	const launches = steps.some(({ outlook }) => outlook.step.kind === 'launch');
 	return steps.map(({ outlook: { step, planStep } }, i) => {
 		const { start, finish } = planStep.candidates;
 		if (step.kind === 'launch') return Uint8Array.from(start, (it) => (it <= launch ? 1 : 0));
-		if (i !== last) return null;
+		if (i !== last || launches) return null;
 		const closes = launchClosesAfter(step, planStep.faces, finish);
 		return closes === null ? null : Uint8Array.from(closes, (it) => (it >= launch ? 1 : 0));
 	});

@@ -1,4 +1,4 @@
-import { POSITION_ROUNDING } from './chain';
+import { POSITION_ROUNDING, within } from './chain';
 import { linkBounds } from './gaps';
 import { linksOf } from './links';
 import type { PlanStep } from './planStep';
@@ -15,7 +15,8 @@ export interface StartWindow {
 
 /**
  * The window of a step's start by the fixed steps before it (logged, taken or pinned): the recoat
- * window of the coat before, where that is on. Null where nothing before it is fixed.
+ * window of the coat before, where that is on. That of a launch runs from the first to the last
+ * launch slot in it. Null where nothing before it is fixed.
  */
 export function startWindow(steps: readonly PlanStep[], to: number): StartWindow | null {
 	let opens = -Infinity;
@@ -40,7 +41,18 @@ export function startWindow(steps: readonly PlanStep[], to: number): StartWindow
 			closedBy = link.from;
 		}
 	}
-	return { opens, closes, openedBy, closedBy };
+	return { ...betweenSlots(opens, closes, steps[to].launchSlots), openedBy, closedBy };
+}
+
+/** A window drawn in to the launch slots inside it; as it is where none is. */
+function betweenSlots(opens: number, closes: number, slots: Float64Array | null) {
+	const inside = slots?.filter((slot) => within(slot, opens, closes)) ?? [];
+	if (inside.length === 0) return { opens, closes };
+	// Without a limit of its own a launch may wait for slots not yet stated.
+	return {
+		opens: inside[0],
+		closes: closes === Infinity ? closes : inside[inside.length - 1]
+	};
 }
 
 /** Whether a slot lies before the window of a step, inside it, or after its work must have begun. */

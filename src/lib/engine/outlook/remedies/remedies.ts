@@ -1,20 +1,13 @@
 import { defaultWind, METHOD_WIND_LIMITS } from '../../coating/methodWind';
-import {
-	METHODS,
-	SHELTERS,
-	STATES,
-	type Limiter,
-	type Method,
-	type ShelterName
-} from '../../vocabulary';
+import { METHODS, SHELTERS, type Limiter, type Method, type ShelterName } from '../../vocabulary';
 import { runsOf, stepHours, type HoursOptions, type HoursRun } from '../hours/stepHours';
 import type { StepHours } from '../hours/result';
 import type { Step } from '../hours/step';
 import type { Site } from '../weather/site';
 import { SLOT_SECONDS, type FaceConditions } from '../weather/slots';
 import type { Remedy } from './remedy';
+import { neededSlots, nextWork, usableSlots, type KeptStarts } from './usable';
 
-const SHUT = STATES.indexOf('shut');
 const SLOT_MINUTES = SLOT_SECONDS / 60;
 const DAY_SLOTS = 86_400 / SLOT_SECONDS;
 
@@ -23,7 +16,8 @@ const NO_REMEDY: readonly Limiter[] = ['none', 'hours', 'dark', 'noData', 'early
 
 /** What the step would meet otherwise: hours with one thing changed. */
 interface Alternative {
-	readonly hours: StepHours;
+	/** 1 for slots that would be of use. */
+	readonly usable: Uint8Array;
 	readonly shelter: ShelterName | null;
 	readonly method: Method | null;
 	readonly isAssumed: boolean;
@@ -40,13 +34,15 @@ export interface RemedyInput {
 		readonly shelter: ShelterName;
 		readonly conditions: readonly FaceConditions[];
 	}[];
+	/** The starts it keeps to, where it does. */
+	readonly kept: KeptStarts | null;
 	/** Slots [from, to) to answer for. */
 	readonly from: number;
 	readonly to: number;
 }
 
 /** The step laid by another method, with the usual wind limits of it where they are wider. */
-function otherMethods({ step, conditions, site, options }: RemedyInput): Alternative[] {
+function otherMethods({ step, conditions, site, options, kept }: RemedyInput): Alternative[] {
 	const own = step.method === 'none' ? null : METHOD_WIND_LIMITS[step.method];
 	if (own === null || (step.limits.wind === undefined && step.limits.gust === undefined)) return [];
 	return METHODS.flatMap((method): Alternative[] => {
@@ -59,16 +55,16 @@ function otherMethods({ step, conditions, site, options }: RemedyInput): Alterna
 			gust: { max: Math.max(usual.gust, step.limits.gust?.max ?? 0) }
 		};
 		const hours = stepHours({ ...step, method, limits }, conditions, site, options);
-		return [{ hours, shelter: null, method, isAssumed: true }];
+		return [{ usable: usableSlots(hours, kept), shelter: null, method, isAssumed: true }];
 	});
 }
 
-function otherShelters({ step, site, shelters, options }: RemedyInput): Alternative[] {
+function otherShelters({ step, site, shelters, options, kept }: RemedyInput): Alternative[] {
 	// Usual errors are those of the open face: what a shelter does to them nobody has measured.
 	return [...shelters]
 		.sort((a, b) => SHELTERS.indexOf(a.shelter) - SHELTERS.indexOf(b.shelter))
 		.map(({ shelter, conditions }) => ({
-			hours: stepHours(step, conditions, site, options),
+			usable: usableSlots(stepHours(step, conditions, site, options), kept),
 			shelter,
 			method: null,
 			isAssumed: false
@@ -77,11 +73,15 @@ function otherShelters({ step, site, shelters, options }: RemedyInput): Alternat
 
 /** Remedies of the shut runs of a step's hours, run by run, the least trouble first. */
 export function remediesOf(input: RemedyInput): Remedy[] {
-	const { hours, conditions, from, to } = input;
+	const { hours, conditions, kept, from, to } = input;
 	const { grid } = conditions[0].weather;
-	const at = (slot: number): number => grid.start + slot * SLOT_SECONDS;
+	const at = (position: number): number => Math.round(grid.start + position * SLOT_SECONDS);
+	const needed = neededSlots(grid.count, kept);
 	const runs = runsOf(hours, from, to).filter(
-		({ state, limiter }) => state === 'shut' && !NO_REMEDY.includes(limiter)
+		(run) =>
+			run.state === 'shut' &&
+			!NO_REMEDY.includes(run.limiter) &&
+			needed.subarray(run.from, run.to).includes(1)
 	);
 	if (runs.length === 0) return [];
 	const alternatives = [...otherMethods(input), ...otherShelters(input)];
@@ -95,12 +95,12 @@ export function remediesOf(input: RemedyInput): Remedy[] {
 			isAssumed: false
 		};
 		return [
-			{ ...told, ...waiting(hours, run, at) },
+			{ ...told, ...waiting(input, run, at) },
 			...alternatives
 				.filter(({ method }) => method === null || run.limiter === 'wind')
-				.map(({ hours: other, shelter, method, isAssumed }) => ({
+				.map(({ usable, shelter, method, isAssumed }) => ({
 					...told,
-					...opened(other, run, at),
+					...opened(usable, run, at),
 					code: method === null ? ('shelter' as const) : ('method' as const),
 					shelter,
 					method,
@@ -112,13 +112,17 @@ export function remediesOf(input: RemedyInput): Remedy[] {
 
 type Gain = Pick<Remedy, 'code' | 'gainMinutes' | 'opensFrom' | 'opensTo'>;
 
-/** The slots of a shut run that other hours would have workable. */
-function opened(other: StepHours, run: HoursRun, at: (slot: number) => number): Omit<Gain, 'code'> {
+/** The slots of a shut run that would be of use otherwise. */
+function opened(
+	usable: Uint8Array,
+	run: HoursRun,
+	at: (position: number) => number
+): Omit<Gain, 'code'> {
 	let slots = 0;
 	let first = -1;
 	let last = -1;
 	for (let slot = run.from; slot < run.to; slot++) {
-		if (other.state[slot] === SHUT) continue;
+		if (usable[slot] === 0) continue;
 		slots++;
 		if (first < 0) first = slot;
 		last = slot;
@@ -130,13 +134,15 @@ function opened(other: StepHours, run: HoursRun, at: (slot: number) => number): 
 	};
 }
 
-/** Waiting: the next stretch that begins within a day of the run's end. */
-function waiting(hours: StepHours, run: HoursRun, at: (slot: number) => number): Gain {
+/** Waiting: the next stretch, or start kept to, within a day of the run's end. */
+function waiting(
+	{ hours, kept }: RemedyInput,
+	run: HoursRun,
+	at: (position: number) => number
+): Gain {
 	const code = run.limiter === 'wet' || run.limiter === 'frost' ? 'dry' : 'wait';
-	const next = hours.stretches.find(
-		(stretch) => stretch.from >= run.to && stretch.from < run.to + DAY_SLOTS
-	);
-	return next === undefined
+	const next = nextWork(hours, kept, run.to, run.to + DAY_SLOTS);
+	return next === null
 		? { code, gainMinutes: 0, opensFrom: null, opensTo: null }
 		: {
 				code,

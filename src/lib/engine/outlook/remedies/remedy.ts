@@ -6,7 +6,8 @@ export type RemedyCode = (typeof REMEDY_CODES)[number];
 
 /**
  * One way to open a shut run of a step. Instants in UTC epoch seconds. A gain of nothing is an
- * answer too: what was tried and would not help.
+ * answer too: what was tried and would not help. Of a launch that keeps to slots, only runs that
+ * shut one are told, and only what makes one workable is a gain.
  */
 export interface Remedy {
 	readonly code: RemedyCode;

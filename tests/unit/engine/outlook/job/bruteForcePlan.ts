@@ -3,8 +3,9 @@ import type { TimeTable } from '../../../../../src/lib/engine/coating/times';
 import type { StepOutlook } from '../../../../../src/lib/engine/outlook/job/stepOutlook';
 
 /**
- * The soonest plan of a short chain on one face by trying every start, with clocks summed slot by
- * slot between the two starts: another route than the planner's.
+ * Plans of a short chain on one face by trying every start, with clocks summed slot by slot between
+ * the two starts: another route than the planner's. Durations are whole slots, and so are launch
+ * slots.
  */
 const sums = new WeakMap<Float64Array, Map<unknown, Float64Array>>();
 
@@ -61,6 +62,15 @@ function follows(steps: readonly StepOutlook[], starts: readonly number[], start
 			start
 		) >=
 			1 - 1e-9;
+	if (here.step.kind === 'launch')
+		return before.every(({ step, faces }, i) => {
+			if (step.kind !== 'coat') return true;
+			const table = step.times.launchMin ?? step.times.touchDry;
+			const { surfaceShaded } = faces[0].sides[0];
+			const isReady =
+				table == null || progress(table, surfaceShaded, 'earliest', finishOf(i), start) >= 1 - 1e-9;
+			return isReady && notPast(i, step.times.launchMax);
+		});
 	const times = coat < 0 ? {} : steps[coat].step.times;
 	if (CLEARS.includes(here.step.kind)) return coat < 0 || done(times.dryToSand ?? times.touchDry);
 	if (here.step.kind !== 'coat') return true;
@@ -76,21 +86,62 @@ function follows(steps: readonly StepOutlook[], starts: readonly number[], start
 	);
 }
 
-/** Starts (slots) of the earliest chain, from the last step backwards; null where there is none. */
-export function earliestChain(steps: readonly StepOutlook[]): number[] | null {
-	let best: number[] | null = null;
-	const isBetter = (a: number[], b: number[]): boolean => {
-		for (let i = a.length - 1; i >= 0; i--) if (a[i] !== b[i]) return a[i] < b[i];
-		return false;
-	};
+/** Slots from which a step can be gone through with; of a launch those stated alone. */
+function workableStarts(
+	{ hours, step }: StepOutlook,
+	launches: readonly number[] | null
+): number[] {
+	const length = step.durationMinutes / 15;
+	const starts: number[] = [];
+	for (let start = 0; start + length <= hours.state.length; start++) {
+		if (step.kind === 'launch' && launches !== null && !launches.includes(start)) continue;
+		if (hours.state.subarray(start, start + length).every((state) => state > 0)) starts.push(start);
+	}
+	return starts;
+}
+
+/**
+ * Starts (slots) of every chain.
+ *
+ * @param launches - slots at which a launch may start; null: any
+ */
+export function everyChain(
+	steps: readonly StepOutlook[],
+	launches: readonly number[] | null = null
+): number[][] {
+	const found: number[][] = [];
+	const choices = steps.map((step) => workableStarts(step, launches));
 	const go = (starts: number[]): void => {
 		if (starts.length === steps.length) {
-			if (best === null || isBetter(starts, best)) best = [...starts];
+			found.push(starts);
 			return;
 		}
-		for (const start of steps[starts.length].planStep.candidates.start)
+		for (const start of choices[starts.length])
 			if (follows(steps, starts, start)) go([...starts, start]);
 	};
 	go([]);
-	return best;
+	return found;
+}
+
+/** Earlier starts from the last step backwards. */
+export function backwards(a: readonly number[], b: readonly number[]): number {
+	for (let i = a.length - 1; i >= 0; i--) if (a[i] !== b[i]) return a[i] - b[i];
+	return 0;
+}
+
+/** Least room over the slots a chain works, as judged slot by slot. */
+export function chainRoom(steps: readonly StepOutlook[], starts: readonly number[]): number {
+	return Math.min(
+		...steps.map(({ hours, step }, i) =>
+			Math.min(...hours.room.subarray(starts[i], starts[i] + step.durationMinutes / 15))
+		)
+	);
+}
+
+/** Starts (slots) of the earliest chain, from the last step backwards; null where there is none. */
+export function earliestChain(
+	steps: readonly StepOutlook[],
+	launches: readonly number[] | null = null
+): number[] | null {
+	return everyChain(steps, launches).sort(backwards)[0] ?? null;
 }

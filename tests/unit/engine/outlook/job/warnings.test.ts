@@ -133,6 +133,8 @@ describe('launches', () => {
 		const { plans, warnings } = outlookOf(job, { launchBy: at(40), launchSlots: [at(90)] });
 		expect(plans.byDate).toBeNull();
 		expect(warnings).toContainEqual({ code: 'noLaunchSlot', launchBy: at(40) });
+		// Ready before the date, but there is nothing to go in with until the slot after it.
+		expect(plans.soonest?.slip).toMatchObject({ launch: at(90), days: 2 });
 	});
 
 	test('not so early that the coat stands ashore too long', () => {
