@@ -6,11 +6,13 @@ import { createDatabase } from '../../../src/lib/server/db/client';
 import { refuseUnwalled } from '../../../src/lib/server/db/health';
 import * as schema from '../../../src/lib/server/db/schema';
 import { UnwalledError } from '../../../src/lib/server/db/walledPool';
+import type { StepRow } from '../../../src/lib/server/db/schema';
 import { layTwoYards, type TwoYards } from '../../fixtures/twoYards';
 import { createTestDatabase } from '../../setup/database';
 
 const { boatPainters, boats, faces, forecastRuns, invitations, jobs, memberships, outlooks } =
 	schema;
+const { absences, jobWaits, planAnswers, plans, planSteps, stepPainters } = schema;
 const { providerStates, sessions, sheets, stands, stepFaces, steps, users, yards } = schema;
 /** Tables that no person's query finds anything in. */
 const OF_NOBODY = ['account_links', 'mails', 'sign_in_attempts', 'workers'];
@@ -75,7 +77,30 @@ async function fillEveryTable(): Promise<void> {
 			})
 			.returning();
 		await db.insert(stepFaces).values({ stepId: step.id, faceId: face.id });
+		await fillPlans(step, userId);
+		await db
+			.insert(absences)
+			.values({ yardId, userId, fromDate: '2026-05-04', toDate: '2026-05-05' });
 	}
+}
+
+/** A plan in force with all that hangs on it, for a step's job that waits for another. */
+async function fillPlans({ id: stepId, jobId }: StepRow, userId: string): Promise<void> {
+	const { db } = database;
+	const at = new Date();
+	const [job] = await db.select().from(jobs).where(eq(jobs.id, jobId));
+	const [before] = await db
+		.insert(jobs)
+		.values({ boatId: job.boatId, name: 'Before', position: 98 })
+		.returning();
+	await db.insert(jobWaits).values({ jobId, afterId: before.id });
+	await db.insert(stepPainters).values({ stepId, userId });
+	const [plan] = await db
+		.insert(plans)
+		.values({ jobId, aim: 'soonest', forecastIssuedAt: at, launchReadyAssumed: false })
+		.returning();
+	await db.insert(planSteps).values({ planId: plan.id, stepId, startAt: at, finishAt: at });
+	await db.insert(planAnswers).values({ planId: plan.id, stepId, userId, answer: 'accepted' });
 }
 
 const asStranger = <T>(work: () => PromiseLike<T>) => onBehalfOf(two.other.manager.id, work);

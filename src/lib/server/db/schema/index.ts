@@ -3,6 +3,8 @@ export * from './people';
 export * from './yard';
 export * from './boats';
 export * from './jobs';
+export * from './plans';
+export * from './absences';
 export * from './forecasts';
 export * from './changes';
 export * from './workers';

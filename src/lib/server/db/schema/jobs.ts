@@ -11,8 +11,16 @@ import {
 	unique,
 	uuid
 } from 'drizzle-orm/pg-core';
-import { METHODS, SHELTERS, STEP_KINDS, type Limits, type Times } from '../../../engine';
+import {
+	METHODS,
+	SHELTERS,
+	STEP_KINDS,
+	type Limits,
+	type TaskCode,
+	type Times
+} from '../../../engine';
 import { boats, faces } from './boats';
+import { users } from './people';
 import { revision } from './revision';
 import { wallOfYard, yardOfParent } from './walls';
 import { yards } from './yard';
@@ -78,7 +86,14 @@ export const steps = pgTable(
 		limits: jsonb().$type<Limits>().notNull().default({}),
 		times: jsonb().$type<Times>().notNull().default({}),
 		shelter: text({ enum: SHELTERS }).notNull().default('open'),
+		/** The rule of work it was queued by, where no sheet speaks for it. */
+		task: text().$type<TaskCode>(),
 		state: text({ enum: STEP_STATES }).notNull().default('queued'),
+		/** A start fixed by hand, which every plan keeps. */
+		pinnedAt: timestamp({ withTimezone: true }),
+		/** When work on it began and ended, as said by who worked. */
+		startedAt: timestamp({ withTimezone: true }),
+		finishedAt: timestamp({ withTimezone: true }),
 		updatedAt: timestamp({ withTimezone: true }).notNull().defaultNow(),
 		revision: revision()
 	},
@@ -98,4 +113,42 @@ export const stepFaces = pgTable(
 			.references(() => faces.id, { onDelete: 'cascade' })
 	},
 	(table) => [primaryKey({ columns: [table.stepId, table.faceId] }), wallOfYard(table.yardId)]
+);
+
+/** A job of a boat that begins only when another of the same boat is done. */
+export const jobWaits = pgTable(
+	'job_waits',
+	{
+		jobId: uuid()
+			.notNull()
+			.references(() => jobs.id, { onDelete: 'cascade' }),
+		yardId: yardOfParent(),
+		afterId: uuid()
+			.notNull()
+			.references(() => jobs.id, { onDelete: 'cascade' })
+	},
+	(table) => [
+		primaryKey({ columns: [table.jobId, table.afterId] }),
+		index().on(table.afterId),
+		wallOfYard(table.yardId)
+	]
+);
+
+/** Who works on a step. */
+export const stepPainters = pgTable(
+	'step_painters',
+	{
+		stepId: uuid()
+			.notNull()
+			.references(() => steps.id, { onDelete: 'cascade' }),
+		yardId: yardOfParent(),
+		userId: uuid()
+			.notNull()
+			.references(() => users.id, { onDelete: 'cascade' })
+	},
+	(table) => [
+		primaryKey({ columns: [table.stepId, table.userId] }),
+		index().on(table.userId),
+		wallOfYard(table.yardId)
+	]
 );

@@ -61,7 +61,9 @@ export const memberships = pgTable(
 		userId: uuid()
 			.notNull()
 			.references(() => users.id, { onDelete: 'cascade' }),
-		role: text({ enum: ROLES }).notNull()
+		role: text({ enum: ROLES }).notNull(),
+		/** A person's own hours of work in this yard; null: the yard's. */
+		workHours: jsonb().$type<WorkHours>()
 	},
 	(table) => [
 		primaryKey({ columns: [table.yardId, table.userId] }),
