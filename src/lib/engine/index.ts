@@ -17,6 +17,7 @@ export {
 	type Shelter,
 	type ShelterFactors
 } from './outlook/face/face';
+export { leeSchema, leeSectorSchema, type LeeSector } from './outlook/face/lee';
 export {
 	forecastSchema,
 	hourlySchema,
@@ -99,7 +100,7 @@ export {
 export { WET_HOUR } from './outlook/hours/roomSeries';
 export { stretchesOf } from './outlook/hours/stretches';
 export type { SlotStates } from './outlook/hours/judge';
-export { workWind } from './outlook/hours/applyLimits';
+export { workWind } from './outlook/hours/workWind';
 export { instantText } from './outlook/weather/instant';
 export { yardWeather, type YardWeather } from './outlook/weather/yardWeather';
 export { surfaceReadingSchema, withReadings, type SurfaceReading } from './outlook/face/readings';

@@ -8,6 +8,7 @@ import { STEFAN_BOLTZMANN } from '../../met/longwave';
 import { convection, vapourTransfer } from '../../met/surface';
 import { logProfileFactor } from '../../met/wind';
 import type { ShelterFactors } from './face';
+import { leeShares, type LeeSector } from './lee';
 import { SLOT_SECONDS, type SlotWeather } from '../weather/slots';
 
 /** Ground roughness of a yard that states none, m (default, no source). */
@@ -122,4 +123,31 @@ export function airAtFace(
 	air.dayMean.set(runningDayMean(air.airTemperature));
 	ofWeather.set(key, air);
 	return air;
+}
+
+/**
+ * The air under a shelter where a lee breaks the wind over the face: less heat and vapour is carried
+ * to and from it. In a variable wind the strongest lee counts, in which a face grows coldest at
+ * night, warmest in the sun, and dries last.
+ */
+export function inLee(
+	air: AirAtFace,
+	weather: SlotWeather,
+	factors: ShelterFactors,
+	roughness: number,
+	lee: readonly LeeSector[]
+): AirAtFace {
+	const shares = leeShares(weather, lee, FACE_HEIGHT, 'inAll');
+	if (shares === null) return air;
+	const windScale = logProfileFactor(roughness, FACE_HEIGHT) * factors.wind;
+	const heatTransfer = shares.map((share, i) =>
+		convection(weather.windSpeed[i] * windScale * share)
+	);
+	return {
+		...air,
+		heatTransfer,
+		vapourTransfer: heatTransfer.map((h, i) =>
+			vapourTransfer(h, air.airTemperature[i], weather.pressure[i])
+		)
+	};
 }

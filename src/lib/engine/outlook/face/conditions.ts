@@ -6,7 +6,7 @@ import {
 	type SurfaceBody,
 	type SurfaceDrive
 } from '../../met/surface';
-import { airAtFace, DEFAULT_ROUGHNESS } from './airAtFace';
+import { airAtFace, DEFAULT_ROUGHNESS, inLee } from './airAtFace';
 import type { Face, Shelter, ShelterFactors } from './face';
 import { flagBit } from '../weather/flags';
 import { shelterFactors } from './shelter';
@@ -79,7 +79,9 @@ function conditionsOfSide(
 	factors: ShelterFactors,
 	stepsPerSlot: StepsPerSlot
 ): FaceConditions {
-	const air = airAtFace(weather, factors, site.roughness ?? DEFAULT_ROUGHNESS);
+	const roughness = site.roughness ?? DEFAULT_ROUGHNESS;
+	const lee = face.lee ?? [];
+	const air = inLee(airAtFace(weather, factors, roughness), weather, factors, roughness, lee);
 	const { count } = weather.grid;
 	const beam = scaled(light.beam, factors.sun);
 	const shaded = scaled(light.diffuse, factors.sun);
@@ -137,6 +139,7 @@ function conditionsOfSide(
 		rainReaches: !factors.rain,
 		dustReaches: !factors.dust,
 		windFactor: factors.wind,
+		lee,
 		flags
 	};
 }

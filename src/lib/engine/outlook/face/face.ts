@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { leeSchema } from './lee';
 import { FINISHES, MATERIALS, SHELTERS } from '../../vocabulary';
 
 /**
@@ -24,7 +25,9 @@ export const faceSchema = z
 			})
 			.optional(),
 		/** Two-sided parts (rudder, keel, drive leg, propeller): both sides are run, the worse binds. */
-		bothSides: z.boolean().optional()
+		bothSides: z.boolean().optional(),
+		/** From where the wind is broken at the stand; absent: from nowhere. */
+		lee: leeSchema.optional()
 	})
 	.refine((face) => face.heatCapacity !== undefined || face.material !== undefined, {
 		error: 'needs heatCapacity or material',

@@ -1,5 +1,3 @@
-import { gustAtHeight, meanAtHeight } from '../../met/wind';
-import { DEFAULT_ROUGHNESS } from '../face/airAtFace';
 import type { Site } from '../weather/site';
 import type { FaceConditions } from '../weather/slots';
 import type { ErrorSeries } from './errors';
@@ -7,40 +5,7 @@ import { limitOn, type Limit } from './limit';
 import { DIRECT_SUN, directSunRoom, rainRoom, trendRoom } from './roomSeries';
 import { filmLimit, rainLimit, sandCounts, sandLimit, spreadLimit } from './sharedLimits';
 import type { Step } from './step';
-
-/** Height at which a method's wind limit is judged, m. */
-const WORK_HEIGHT = 2;
-
-/** Mean and gust at the step's work height behind the shelter, m/s. */
-export interface WorkWind {
-	readonly mean: Float64Array;
-	readonly gust: Float64Array;
-}
-
-const remembered = new WeakMap<FaceConditions['weather'], Map<string, WorkWind>>();
-
-/** Mean and gust at a work height behind the shelter, m/s; once per weather, height and shelter. */
-export function workWind(face: FaceConditions, site: Site, height: number = WORK_HEIGHT): WorkWind {
-	const { weather, windFactor } = face;
-	const roughness = site.roughness ?? DEFAULT_ROUGHNESS;
-	const key = `${roughness} ${height} ${windFactor}`;
-	const ofWeather = remembered.get(weather) ?? new Map<string, WorkWind>();
-	remembered.set(weather, ofWeather);
-	const before = ofWeather.get(key);
-	if (before !== undefined) return before;
-	const scale = meanAtHeight(1, roughness, height);
-	const count = weather.grid.count;
-	const mean = new Float64Array(count);
-	const gust = new Float64Array(count);
-	for (let i = 0; i < count; i++) {
-		const there = weather.windSpeed[i] * scale;
-		mean[i] = there * windFactor;
-		gust[i] = gustAtHeight(weather.windSpeed[i], weather.windGust[i], there) * windFactor;
-	}
-	const wind = { mean, gust };
-	ofWeather.set(key, wind);
-	return wind;
-}
+import { workWind } from './workWind';
 
 const APPLY = 'apply' as const;
 

@@ -14,6 +14,13 @@ const remembered = new WeakMap<Float64Array, Map<string, Uint8Array>>();
 
 /** 1 where the air at a face shuts a step: the limits that no surface enters. */
 function shutByAir(step: Step, face: FaceConditions, site: Site, errors: ErrorSeries): Uint8Array {
+	const shutBy = (): Uint8Array => {
+		const shut = new Uint8Array(face.weather.grid.count);
+		for (const limit of airLimits(step, face, 0, site, errors)) markBroken(limit, shut);
+		return shut;
+	};
+	// Every stand has a lee of its own: not kept, they would fill the memory.
+	if (face.lee.length > 0) return shutBy();
 	const { airTemperature, relativeHumidity, wind, gust, windHeight, rainFree, sand } = step.limits;
 	const key = JSON.stringify([
 		[airTemperature, relativeHumidity, wind, gust, windHeight, rainFree, sand],
@@ -23,8 +30,7 @@ function shutByAir(step: Step, face: FaceConditions, site: Site, errors: ErrorSe
 	remembered.set(face.airTemperature, ofAir);
 	const before = ofAir.get(key);
 	if (before !== undefined) return before;
-	const shut = new Uint8Array(face.weather.grid.count);
-	for (const limit of airLimits(step, face, 0, site, errors)) markBroken(limit, shut);
+	const shut = shutBy();
 	ofAir.set(key, shut);
 	return shut;
 }

@@ -1,3 +1,5 @@
+import type { LeeSector } from '../face/lee';
+
 /** Length of a slot, seconds. Slot i of a grid is [start + i·900, start + (i + 1)·900). */
 export const SLOT_SECONDS = 900;
 
@@ -84,6 +86,8 @@ export interface FaceConditions {
 	readonly dustReaches: boolean;
 	/** Factor of the shelter on mean and gust. */
 	readonly windFactor: number;
+	/** From where the wind is broken at the stand. */
+	readonly lee: readonly LeeSector[];
 	/** Bits of SLOT_FLAGS: the weather's and the face's own. */
 	readonly flags: Uint8Array;
 }
