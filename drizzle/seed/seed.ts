@@ -1,5 +1,5 @@
 import { eq, sql } from 'drizzle-orm';
-import { FACE_ORIENTATIONS, localDate } from '../../src/lib/engine';
+import { addDays, FACE_ORIENTATIONS, localDate, type SampleName } from '../../src/lib/engine';
 import { hashPassword } from '../../src/lib/server/access/passwords';
 import type { Database } from '../../src/lib/server/db/client';
 import {
@@ -17,14 +17,10 @@ import {
 } from '../../src/lib/server/db/schema';
 import { COLOURS } from '../../src/lib/server/boats/hulls';
 import { DEMO_BOATS, DEMO_PEOPLE, DEMO_YARD, type DemoBoat } from './demo';
-import { laySamples } from '../../src/lib/server/jobs/samples';
-import { stepRules } from '../../src/lib/server/jobs/stepRules';
+import { laySamples } from '../../src/lib/server/sheets/samples';
 
 type Transaction = Parameters<Parameters<Database['transaction']>[0]>[0];
 const ROLE_NAMES = Object.keys(DEMO_PEOPLE) as (keyof typeof DEMO_PEOPLE & Role)[];
-
-const dateFrom = (today: string, days: number): string =>
-	new Date(Date.parse(`${today}T00:00:00Z`) + days * 86_400_000).toISOString().slice(0, 10);
 
 const first = <T>(rows: T[]): T => {
 	const [row] = rows;
@@ -54,7 +50,7 @@ async function insertBoat(
 	tx: Transaction,
 	boat: DemoBoat,
 	place: { yardId: string; standId: string; ownerId: string | null; painterId: string | null },
-	sheetIds: Map<string, string>,
+	sheetIds: ReadonlyMap<SampleName, string>,
 	now: Date,
 	today: string
 ): Promise<void> {
@@ -67,8 +63,8 @@ async function insertBoat(
 				ownerId: place.ownerId,
 				name: boat.name,
 				heading: boat.heading,
-				hauledOn: dateFrom(today, -boat.hauled),
-				launchBy: dateFrom(today, boat.launch)
+				hauledOn: addDays(today, -boat.hauled),
+				launchBy: addDays(today, boat.launch)
 			})
 			.returning({ id: boats.id })
 	);
@@ -110,7 +106,8 @@ async function insertBoat(
 						method: step.method,
 						durationMinutes: step.hours * 60,
 						sheetId: step.sheet === undefined ? null : (sheetIds.get(step.sheet) ?? null),
-						...stepRules(job.steps, order),
+						task: step.task ?? null,
+						limits: step.limits ?? {},
 						shelter: step.shelter ?? 'open',
 						updatedAt: now
 					})
@@ -187,7 +184,7 @@ export async function seedDemo(db: Database, now: Date): Promise<'laid' | 'renew
 			if (plan === undefined) continue;
 			await tx
 				.update(boats)
-				.set({ hauledOn: dateFrom(today, -plan.hauled), launchBy: dateFrom(today, plan.launch) })
+				.set({ hauledOn: addDays(today, -plan.hauled), launchBy: addDays(today, plan.launch) })
 				.where(eq(boats.id, id));
 		}
 		return 'renewed';

@@ -70,7 +70,7 @@ export {
 export { cureClock, finishPosition, finishSlots, type CureClock } from './coating/cure';
 export { minutesAt, type ClockSide } from './coating/curve';
 export { MATERIAL_DEFAULTS, RUN_OFF_DEPTH, WET_FILM } from './met/materials';
-export { localDate, localDays, nights, type LocalDay } from './outlook/weather/calendar';
+export { addDays, localDate, localDays, nights, type LocalDay } from './outlook/weather/calendar';
 export { faceConditions } from './outlook/face/conditions';
 export { DEFAULT_USUAL_ERRORS } from './outlook/hours/errors';
 export { flagBit, flagNames } from './outlook/weather/flags';

@@ -89,7 +89,7 @@ describe('queueing a usual job', () => {
 			expect(queue).toHaveLength(length);
 			for (const { step, sheet, faces: worked } of queue) {
 				expect(worked.length).toBeGreaterThan(0);
-				if (step.kind === 'coat') expect(sheet?.sample).toBe(true);
+				if (step.kind === 'coat') expect(sheet?.sheet.sample).toBe(true);
 				else expect(sheet).toBeNull();
 			}
 		}
@@ -130,11 +130,11 @@ test('a coat whose sheet the yard has not is not queued, nor anything of its job
 	const manager = await as('manager');
 	const id = (await addBoat(database.db, manager, { ...BOAT, name: 'Plover', stand: '' })) ?? '';
 	const { name } = SAMPLE_SHEETS.etchPrimer;
-	const rename = (from: string, to: string) =>
-		database.db.update(sheets).set({ name: to }).where(eq(sheets.name, from));
-	await rename(name, 'another name');
+	const rekey = (from: string, to: string) =>
+		database.db.update(sheets).set({ key: to }).where(eq(sheets.key, from));
+	await rekey('etchPrimer', 'gone');
 	const result = await queueJob(database.db, manager, id, 'runningGear');
-	await rename('another name', name);
+	await rekey('gone', 'etchPrimer');
 	expect(result).toMatchObject({ outcome: 'refused', why: expect.stringContaining(name) });
 	expect(await jobsOfBoat(database.db, id)).toEqual([]);
 });

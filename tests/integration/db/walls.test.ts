@@ -1,6 +1,7 @@
 import { and, eq, getTableName, is, sql } from 'drizzle-orm';
 import { PgTable } from 'drizzle-orm/pg-core';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
+import { SAMPLE_SHEETS } from '../../../src/lib/engine';
 import { onBehalfOf, onDuty } from '../../../src/lib/server/db/behalf';
 import { createDatabase } from '../../../src/lib/server/db/client';
 import { refuseUnwalled } from '../../../src/lib/server/db/health';
@@ -44,7 +45,9 @@ async function fillEveryTable(): Promise<void> {
 			.values({ yardId, provider: 'open-meteo', issuedAt: at, fetchedAt: at, hourly });
 		await db.insert(providerStates).values({ yardId, provider: 'open-meteo' });
 		await db.insert(stands).values({ yardId, name: 'slip', position: 99 });
-		await db.insert(sheets).values({ yardId, name: 'own', limits: {}, times: {} });
+		await db
+			.insert(sheets)
+			.values({ yardId, key: 'own', sheet: { ...SAMPLE_SHEETS.varnish, name: 'own' } });
 		const [step] = await db.select().from(steps).where(eq(steps.yardId, yardId)).limit(1);
 		await db.insert(outlooks).values({ key: yardId, stepId: step.id, hours: {} });
 		const [member] = await db

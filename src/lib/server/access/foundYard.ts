@@ -4,7 +4,7 @@ import { siteSchema } from '../../engine';
 import { inAccounts } from '../db/accountsWork';
 import type { Database } from '../db/client';
 import { memberships, users, yards } from '../db/schema';
-import { laySamples } from '../jobs/samples';
+import { laySamples } from '../sheets/samples';
 import { foundLetter, knownLetter } from '../mail/letters';
 import { post, type Writer } from '../mail/outbox';
 import { createLink, followLink } from './links';

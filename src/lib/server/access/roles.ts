@@ -26,6 +26,12 @@ const PERMISSIONS = {
 	addBoat: ['manager', 'owner'],
 	/** Queue and drop work on a boat that one may see. */
 	queueWork: ['manager', 'owner', 'painter'],
+	/** Queue and log what only the yard's own people do. */
+	yardWork: ['manager'],
+	/** Take a plan for a job of a boat one may see. */
+	takePlan: ['manager', 'owner'],
+	/** Say another's hours and absences; everybody says their own. */
+	setTimes: ['manager'],
 	/** See everybody of the yard and who was asked, and take an invitation back. */
 	seePeople: ['manager']
 } as const satisfies Record<string, readonly Role[]>;

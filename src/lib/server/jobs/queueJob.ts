@@ -3,7 +3,7 @@ import { SAMPLE_SHEETS } from '../../engine';
 import { visibleBoats, type Membership } from '../access/roles';
 import type { Database } from '../db/client';
 import { boats, faces, jobs, sheets, stepFaces, steps } from '../db/schema';
-import { stepRules } from './stepRules';
+import { lockQueue } from './jobEdit';
 import { templateOf } from './templates';
 
 export type QueueResult =
@@ -41,22 +41,21 @@ export function queueJob(
 				outcome: 'refused',
 				why: `This boat has none of the faces that ${template.name.toLowerCase()} works on.`
 			};
-		// The yard's own copy of each sample, its newest version.
+		// The newest version of each in the yard's library, whatever it is called there.
 		const library = await tx
-			.select({ id: sheets.id, name: sheets.name })
+			.select({ id: sheets.id, key: sheets.key })
 			.from(sheets)
 			.where(eq(sheets.yardId, membership.yard.id))
 			.orderBy(sheets.version);
-		const sheetIds = new Map(library.map(({ id, name }) => [name, id]));
+		const sheetIds = new Map(library.map(({ id, key }) => [key, id]));
 		// A coat without its sheet would have no limits to shut it: better no job than such a one.
-		const missing = template.steps.find(
-			({ sheet }) => sheet !== undefined && !sheetIds.has(SAMPLE_SHEETS[sheet].name)
-		);
+		const missing = template.steps.find(({ sheet }) => sheet !== undefined && !sheetIds.has(sheet));
 		if (missing?.sheet !== undefined)
 			return {
 				outcome: 'refused',
 				why: `The yard has no sheet “${SAMPLE_SHEETS[missing.sheet].name}” for ${missing.name}.`
 			};
+		await lockQueue(tx, boatId);
 		const [{ last }] = await tx
 			.select({ last: max(jobs.position) })
 			.from(jobs)
@@ -65,8 +64,7 @@ export function queueJob(
 			.insert(jobs)
 			.values({ boatId, name: template.name, position: (last ?? -1) + 1 })
 			.returning({ id: jobs.id });
-		const written = template.steps.map((step) => ({ ...step, faces: template.faces }));
-		for (const [position, step] of written.entries()) {
+		for (const [position, step] of template.steps.entries()) {
 			const [{ id: stepId }] = await tx
 				.insert(steps)
 				.values({
@@ -76,11 +74,8 @@ export function queueJob(
 					kind: step.kind,
 					method: step.method,
 					durationMinutes: step.hours * 60,
-					sheetId:
-						step.sheet === undefined
-							? null
-							: (sheetIds.get(SAMPLE_SHEETS[step.sheet].name) ?? null),
-					...stepRules(written, position)
+					sheetId: step.sheet === undefined ? null : (sheetIds.get(step.sheet) ?? null),
+					task: step.task ?? null
 				})
 				.returning({ id: steps.id });
 			await tx.insert(stepFaces).values(faceIds.map((faceId) => ({ stepId, faceId })));

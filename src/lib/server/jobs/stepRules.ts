@@ -1,59 +1,33 @@
 import {
 	methodLimits,
-	SAMPLE_SHEETS,
 	taskOf,
 	timesBefore,
+	type CoatingType,
 	type Limits,
-	type Method,
-	type SampleName,
-	type TaskCode,
+	type Sheet,
 	type Times
 } from '../../engine';
-
-/** A step as a queue is written down before it is laid: its sample sheet or rule, and on which faces. */
-export interface WrittenStep<Face> {
-	readonly method: Method;
-	readonly faces: readonly Face[];
-	readonly sheet?: SampleName;
-	/** The rule of work without a sheet. */
-	readonly task?: TaskCode;
-	readonly limits?: Limits;
-}
-
-/** The coat that a step's own is next covered by; null where none follows on one of its faces. */
-function nextCoatOf<Face>(
-	steps: readonly WrittenStep<Face>[],
-	order: number
-): WrittenStep<Face> | null {
-	const { faces } = steps[order];
-	const next = steps
-		.slice(order + 1)
-		.find((it) => it.sheet !== undefined && it.faces.some((face) => faces.includes(face)));
-	return next ?? null;
-}
+import type { StepRow } from '../db/schema';
 
 /**
- * Limits and times that a step has beside its sheet's: the most wind of its method, the
- * overcoat times toward the very coat that follows, the rule of work without a sheet.
+ * Limits and times of a step: its sheet's, with the most wind of its method and the overcoat times
+ * toward the very coat that follows; without a sheet those of its rule of work; over both what
+ * the step says of its own, key by key.
+ *
+ * @param next - kind of the coat that follows on one of its faces; null where none does
  */
-export function stepRules<Face>(
-	steps: readonly WrittenStep<Face>[],
-	order: number
+export function stepRules(
+	step: Pick<StepRow, 'method' | 'task' | 'limits' | 'times'>,
+	sheet: Sheet | null,
+	next: CoatingType | null
 ): { limits: Limits; times: Times } {
-	const step = steps[order];
-	const task = step.task === undefined ? null : taskOf(step.task);
-	if (step.sheet === undefined)
-		return { limits: { ...task?.limits, ...step.limits }, times: { ...task?.times } };
-	const sheet = SAMPLE_SHEETS[step.sheet];
-	const { wind, gust } = methodLimits(sheet, step.method).limits;
-	const next = nextCoatOf(steps, order);
-	const pair = next?.sheet === undefined ? null : SAMPLE_SHEETS[next.sheet].type;
-	const { times, overcoatMin, overcoatMax } = timesBefore(sheet, pair);
+	const task = step.task === null ? null : taskOf(step.task);
+	const given =
+		sheet === null
+			? { limits: task?.limits, times: task?.times }
+			: { limits: methodLimits(sheet, step.method).limits, times: timesBefore(sheet, next).times };
 	return {
-		limits: { wind, gust, ...step.limits },
-		times: {
-			...(overcoatMin === 'pair' ? { overcoatMin: times.overcoatMin } : {}),
-			...(overcoatMax === 'pair' ? { overcoatMax: times.overcoatMax } : {})
-		}
+		limits: { ...given.limits, ...step.limits },
+		times: { ...given.times, ...step.times }
 	};
 }

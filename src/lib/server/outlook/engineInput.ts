@@ -1,6 +1,9 @@
-import { faceAzimuth, type Face, type Site, type Step } from '../../engine';
+import { dayStart } from '../../time/dates';
+import { hoursInBoth } from '../../time/weekly';
+import { addDays, faceAzimuth, type Face, type Site, type Step } from '../../engine';
 import type { QueuedStep } from '../db/queue';
 import type { FaceRow, Yard } from '../db/schema';
+import { stepRules } from '../jobs/stepRules';
 
 /** The yard as the engine's site. */
 export function siteOf(yard: Yard): Site {
@@ -28,16 +31,26 @@ export function faceOf(row: FaceRow, heading: number): Face {
 	};
 }
 
-/** A queued step as the engine's: its own limits and times stand over its sheet's, key by key. */
-export function stepOf({ step, sheet }: QueuedStep, yard: Yard): Step {
+/** Whole days of a zone as a span of instants, UTC epoch seconds. */
+const daysAway = (timeZone: string, { from, to }: { from: string; to: string }) => ({
+	from: dayStart(timeZone, from),
+	to: dayStart(timeZone, addDays(to, 1))
+});
+
+/** A step as the engine's: worked when the yard is open and everybody who works on it is there. */
+export function stepOf(queued: QueuedStep, yard: Yard): Step {
+	const { step, sheet, nextCoating, painters, absences } = queued;
+	const own = painters.flatMap(({ workHours }) => (workHours === null ? [] : [workHours]));
 	return {
 		name: step.name,
 		kind: step.kind,
 		durationMinutes: step.durationMinutes,
 		method: step.method,
-		workHours: yard.workHours,
-		limits: { ...sheet?.limits, ...step.limits },
-		times: { ...sheet?.times, ...step.times }
+		workHours: own.reduce(hoursInBoth, yard.workHours),
+		...(absences.length === 0
+			? {}
+			: { closed: absences.map((away) => daysAway(yard.timeZone, away)) }),
+		...stepRules(step, sheet?.sheet ?? null, nextCoating)
 	};
 }
 

@@ -96,9 +96,9 @@ export function stepFacts({ step, job, sheet, faces }: QueuedStep) {
 		faces: faces.map(faceWords),
 		shelter: step.shelter,
 		durationMinutes: step.durationMinutes,
-		sampleSheet: sheet?.sample ?? false,
+		sampleSheet: sheet?.sheet.sample ?? false,
 		sheet: sheet?.name ?? null,
-		caution: cautionOf(step.kind, step.method, sheet?.hazards ?? [])
+		caution: cautionOf(step.kind, step.method, sheet?.sheet.hazards ?? [])
 	} satisfies Partial<HoursStep>;
 }
 

@@ -39,7 +39,7 @@ function instantOf(timeZone: string, date: string, time: string): number {
 }
 
 /** The date so many days after a date; calendar arithmetic, no zone. */
-function addDays(date: string, days: number): string {
+export function addDays(date: string, days: number): string {
 	return new Date(Date.parse(`${date}T00:00:00Z`) + days * DAY_SECONDS * 1000)
 		.toISOString()
 		.slice(0, 10);

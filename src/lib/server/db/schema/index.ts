@@ -2,6 +2,7 @@ export * from './accounts';
 export * from './people';
 export * from './yard';
 export * from './boats';
+export * from './sheets';
 export * from './jobs';
 export * from './plans';
 export * from './absences';

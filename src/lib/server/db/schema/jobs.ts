@@ -1,5 +1,4 @@
 import {
-	boolean,
 	doublePrecision,
 	index,
 	integer,
@@ -8,7 +7,6 @@ import {
 	primaryKey,
 	text,
 	timestamp,
-	unique,
 	uuid
 } from 'drizzle-orm/pg-core';
 import {
@@ -19,36 +17,12 @@ import {
 	type TaskCode,
 	type Times
 } from '../../../engine';
+import { STEP_STATES } from '../../../api/jobs';
 import { boats, faces } from './boats';
 import { users } from './people';
 import { revision } from './revision';
+import { sheets } from './sheets';
 import { wallOfYard, yardOfParent } from './walls';
-import { yards } from './yard';
-
-/** A coating's data sheet. A sample is to be checked against the tin before use. */
-export const sheets = pgTable(
-	'sheets',
-	{
-		id: uuid().primaryKey().defaultRandom(),
-		yardId: uuid()
-			.notNull()
-			.references(() => yards.id, { onDelete: 'cascade' }),
-		name: text().notNull(),
-		version: integer().notNull().default(1),
-		sample: boolean().notNull().default(false),
-		limits: jsonb().$type<Limits>().notNull(),
-		times: jsonb().$type<Times>().notNull(),
-		/** A word for the hazards whose caution stands beside the work. */
-		hazards: text().array().notNull().default([]),
-		revision: revision()
-	},
-	(table) => [
-		unique().on(table.yardId, table.name, table.version),
-		// A yard is founded with its sample sheets.
-		wallOfYard(table.yardId, 'accounts')
-	]
-);
-export type SheetRow = typeof sheets.$inferSelect;
 
 /** A queue of steps on one boat. */
 export const jobs = pgTable(
@@ -66,9 +40,10 @@ export const jobs = pgTable(
 	(table) => [index().on(table.boatId), wallOfYard(table.yardId)]
 );
 
-export const STEP_STATES = ['queued', 'underWay', 'curing', 'done', 'dropped'] as const;
-
-/** One step. Limits and times of its own stand over those of its sheet, key by key. */
+/**
+ * One step. Limits and times come from its sheet, or from the rule of work it is done by; those of
+ * its own stand over them, key by key.
+ */
 export const steps = pgTable(
 	'steps',
 	{

@@ -1,0 +1,68 @@
+import type { WorkHours } from '../engine';
+
+interface Span {
+	readonly from: number;
+	readonly to: number;
+}
+
+const DAY = 1440;
+const WEEK = 7 * DAY;
+
+const minutesOf = (time: string): number => {
+	const [hours, minutes] = time.split(':').map(Number);
+	return hours * 60 + minutes;
+};
+
+const timeOf = (minutes: number): string =>
+	`${String(Math.floor(minutes / 60)).padStart(2, '0')}:${String(minutes % 60).padStart(2, '0')}`;
+
+/** Weekly hours as spans of minutes from Monday's midnight; what runs past Sunday's end comes again at the start. */
+function weekSpans(hours: WorkHours): Span[] {
+	const spans = hours.flatMap(({ days, from, to }) =>
+		days.flatMap((day) => {
+			const start = (day - 1) * DAY + minutesOf(from);
+			const length = (minutesOf(to) - minutesOf(from) + DAY) % DAY || DAY;
+			const end = start + length;
+			return end <= WEEK
+				? [{ from: start, to: end }]
+				: [
+						{ from: start, to: WEEK },
+						{ from: 0, to: end - WEEK }
+					];
+		})
+	);
+	return spans.sort((a, b) => a.from - b.from);
+}
+
+/** Spans cut at each midnight, as weekly hours. A day to its end is written as to 00:00. */
+function weeklyOf(spans: readonly Span[]): WorkHours {
+	return spans.flatMap(({ from, to }) => {
+		const days: WorkHours = [];
+		for (let start = from; start < to;) {
+			const day = Math.floor(start / DAY);
+			const end = Math.min(to, (day + 1) * DAY);
+			days.push({
+				days: [day + 1],
+				from: timeOf(start - day * DAY),
+				to: timeOf((end - day * DAY) % DAY)
+			});
+			start = end;
+		}
+		return days;
+	});
+}
+
+/** Weekly hours that lie inside both; empty where none do. */
+export function hoursInBoth(a: WorkHours, b: WorkHours): WorkHours {
+	const ours = weekSpans(a);
+	const theirs = weekSpans(b);
+	const both = ours.flatMap((one) =>
+		theirs
+			.map((other) => ({
+				from: Math.max(one.from, other.from),
+				to: Math.min(one.to, other.to)
+			}))
+			.filter(({ from, to }) => from < to)
+	);
+	return weeklyOf(both.sort((one, other) => one.from - other.from));
+}
