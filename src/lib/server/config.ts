@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { filesConfigSchema } from './files/config';
 import { forecastConfigSchema } from './forecast/config';
 import { mailConfigSchema } from './mail/config';
 
@@ -9,6 +10,7 @@ const postgresUrl = z.url({
 
 /** Everything this process is told from outside; read once, at its start. */
 export const configSchema = z.object({
+	...filesConfigSchema.shape,
 	...forecastConfigSchema.shape,
 	...mailConfigSchema.shape,
 	DATABASE_URL: postgresUrl,
