@@ -11,14 +11,11 @@ import {
 	uniqueIndex,
 	uuid
 } from 'drizzle-orm/pg-core';
+import { PLAN_AIMS, PLAN_ANSWERS } from '../../../api/plans';
 import { LIMITERS } from '../../../engine';
 import { jobs, steps } from './jobs';
 import { users } from './people';
 import { wallOfYard, yardOfParent } from './walls';
-
-/** What a plan was made for; `byDate`: the surest of those ready for the launch chosen. */
-export const PLAN_AIMS = ['soonest', 'surest', 'byDate'] as const;
-export type PlanAim = (typeof PLAN_AIMS)[number];
 
 /** A plan that somebody took for a job, as it stood then. One at a time is in force. */
 export const plans = pgTable(
@@ -55,9 +52,6 @@ export const plans = pgTable(
 	]
 );
 export type PlanRow = typeof plans.$inferSelect;
-
-export const PLAN_ANSWERS = ['accepted', 'declined'] as const;
-export type PlanAnswer = (typeof PLAN_ANSWERS)[number];
 
 /** Where a plan puts a step. */
 export const planSteps = pgTable(
