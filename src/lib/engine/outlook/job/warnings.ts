@@ -3,7 +3,7 @@ import type { YardWeather } from '../weather/yardWeather';
 import { workedSlots } from '../plan/candidates';
 import { chosenLaunch, instantAt, positionOf } from '../plan/launch';
 import { launchTable } from '../plan/launchReady';
-import { soonest } from '../plan/objectives';
+import { firstOutOfReach } from '../plan/objectives';
 import { gapsOf } from '../plan/gaps';
 import type { Plans } from '../plan/plan';
 import { isCoat, type PlanStep } from '../plan/planStep';
@@ -72,14 +72,9 @@ export const WARNING_CODES = [
 const FEW_HOURS = 12;
 const HOURS_PER_SLOT = SLOT_SECONDS / 3600;
 
-/** The first step that no way through the chain reaches; null where one goes through. */
-function firstOutOfReach(steps: readonly PlanStep[]): number | null {
-	for (let length = 1; length <= steps.length; length++) {
-		const head = steps.slice(0, length);
-		const chain = { steps: head.map((it) => it.candidates), gaps: gapsOf(head) };
-		if (soonest(chain) === null) return length - 1;
-	}
-	return null;
+/** The first step that no way through the job reaches; null where one goes through. */
+function breakOf(steps: readonly PlanStep[]): number | null {
+	return firstOutOfReach({ steps: steps.map((it) => it.candidates), gaps: gapsOf(steps) });
 }
 
 /** Whether a slot is worked from one of some starts. */
@@ -198,8 +193,7 @@ export function warningsOf(
 	from: number
 ): Warning[] {
 	const firstSlot = Math.ceil(positionOf(yard.weather.grid, from) - 1e-9);
-	const breaksAt =
-		plans.soonest === null ? firstOutOfReach(outlooks.map((it) => it.planStep)) : null;
+	const breaksAt = plans.soonest === null ? breakOf(outlooks.map((it) => it.planStep)) : null;
 	const putIn = (plans.soonest?.steps ?? []).flatMap(({ step }, i, all): Warning[] => {
 		const next = all[i + 1]?.step ?? null;
 		return step === null && next !== null ? [{ code: 'abradingPutIn', step: next }] : [];

@@ -40,18 +40,41 @@ export function abradingBefore({ step, faces }: JobStep, sanding: Task): JobStep
 	};
 }
 
-/** Most places tried in every combination; of more, one, two and all of them are. */
+/** Most places beyond the needed ones tried in every combination; of more, none, one, two and all are. */
 const ALL_COMBINATIONS = 6;
+/** Most ways of one size that are tried, the earliest places first; all there are of six. */
+const MOST_WAYS = 64;
 
-/** Ways to choose places, fewest first, each way a set of places. */
-export function placeSets(places: readonly number[]): number[][][] {
+/**
+ * Ways to choose places, fewest first, each way a set of places in order. What provably does not
+ * help is left out.
+ *
+ * @param mayHelp - false only where abrading before those coats, and no others, leaves no way; true
+ * of a set makes it true of every set around it
+ */
+export function* placeSets(
+	places: readonly number[],
+	mayHelp: (places: readonly number[]) => boolean
+): Generator<number[][]> {
+	if (places.length === 0 || !mayHelp(places)) return;
+	const needed = places.filter((place) => !mayHelp(places.filter((it) => it !== place)));
+	const rest = places.filter((place) => !needed.includes(place));
 	const sizes =
-		places.length <= ALL_COMBINATIONS ? places.map((_, i) => i + 1) : [1, 2, places.length];
-	return sizes.map((size) => combinations(places, size));
+		rest.length <= ALL_COMBINATIONS
+			? Array.from({ length: rest.length + 1 }, (_, size) => size)
+			: [0, 1, 2, rest.length];
+	for (const size of sizes) {
+		if (needed.length + size === 0) continue;
+		yield combinations(rest, size)
+			.slice(0, MOST_WAYS)
+			.map((more) => [...needed, ...more].sort((a, b) => a - b))
+			.filter(mayHelp);
+	}
 }
 
 function combinations(places: readonly number[], size: number): number[][] {
 	if (size === 0) return [[]];
+	if (size > places.length) return [];
 	return places.flatMap((place, i) =>
 		combinations(places.slice(i + 1), size - 1).map((rest) => [place, ...rest])
 	);

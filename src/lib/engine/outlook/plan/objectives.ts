@@ -1,5 +1,6 @@
 import type { Chain } from './chain';
-import { sweep, type Objective, type Way } from './sweep';
+import { heaviestWay } from './heaviest';
+import { domainsOf, earliestWay } from './lattice';
 
 /** A way through a chain with what it is ranked by. */
 export interface RankedWay {
@@ -35,7 +36,7 @@ export const bySoonest = (a: RankedWay, b: RankedWay): number =>
 export const bySurest = (a: RankedWay, b: RankedWay): number =>
 	(a.room === b.room ? 0 : b.room - a.room) || b.score - a.score || bySoonest(a, b);
 
-function ranked(chain: Chain, { starts }: Way): RankedWay {
+function ranked(chain: Chain, starts: Int32Array): RankedWay {
 	let room = Infinity;
 	let score = 0;
 	let ready = -Infinity;
@@ -59,65 +60,99 @@ function masks(chain: Chain, least: number, readyBy: number, bounds: PlanBounds)
 	});
 }
 
-const NOTHING = (chain: Chain): Float64Array[] =>
-	chain.steps.map((step) => new Float64Array(step.start.length));
-
 /**
- * Of the ways of one value, the one launch-ready first, and of those the earliest from the last
- * step backwards. Readiness only grows with each start, so the search is over the bound on it.
+ * Of the ways that a search finds under a bound on readiness, the one ready first. Readiness grows
+ * with every start but where its clock runs into unknown weather, so the way of earliest starts has
+ * it nearly always; else the search is over the bound.
  */
-function soonestOf(
+function readyFirst(
 	chain: Chain,
-	best: Way,
 	readyBy: number,
-	find: (readyBy: number) => Way | null
-): Way {
-	const ready = (way: Way): number => ranked(chain, way).ready;
-	const last = chain.steps.length - 1;
-	// The earliest last start of all is found already: no way is ready before that step is.
-	const least = chain.steps[last].ready[best.starts[last]];
-	let found = best;
-	if (ready(found) <= least) return found;
-	const instants = [
-		...new Set(chain.steps.flatMap((step) => [...step.ready].filter((it) => it >= least)))
-	].sort((a, b) => a - b);
+	find: (readyBy: number) => RankedWay | null
+): RankedWay | null {
+	const first = find(readyBy);
+	if (first === null || isRising(chain)) return first;
+	const instants = [...new Set(chain.steps.flatMap((step) => [...step.ready]))]
+		.filter((it) => it < first.ready)
+		.sort((a, b) => a - b);
+	let found = first;
 	let low = 0;
-	let high = instants.findIndex((it) => it >= Math.min(ready(found), readyBy));
+	let high = instants.length;
 	while (low < high) {
 		const middle = (low + high) >> 1;
 		const way = find(instants[middle]);
-		if (way !== null && way.value === best.value) {
+		if (way !== null) {
 			found = way;
 			high = middle;
 		} else low = middle + 1;
 	}
-	// The bound that was met once more, for the earliest starts under it.
-	return find(instants[high]) ?? found;
+	return found;
+}
+
+const isRising = ({ steps }: Chain): boolean =>
+	steps.every(({ ready }) => ready.every((it, k) => k === 0 || it >= ready[k - 1]));
+
+/** The way of earliest starts with at least so much room, ready by a position. */
+function earliest(
+	chain: Chain,
+	least: number,
+	readyBy: number,
+	bounds: PlanBounds
+): RankedWay | null {
+	const domains = domainsOf(chain, masks(chain, least, readyBy, bounds));
+	const { places } = earliestWay(chain, domains);
+	return places === null
+		? null
+		: ranked(
+				chain,
+				places.map((place, step) => domains[step][place])
+			);
+}
+
+/** The first step of a chain that no way reaches; null where one goes through. */
+export function firstOutOfReach(chain: Chain, bounds: PlanBounds = {}): number | null {
+	const allowed = masks(chain, -Infinity, bounds.readyBy ?? Infinity, bounds);
+	return earliestWay(chain, domainsOf(chain, allowed)).outOfReach;
 }
 
 /** Launch-ready soonest, then the earliest starts from the last step backwards. Null: no way. */
 export function soonest(chain: Chain, bounds: PlanBounds = {}): RankedWay | null {
-	const values = NOTHING(chain);
-	const readyBy = bounds.readyBy ?? Infinity;
-	const find = (by: number): Way | null =>
-		sweep(chain, { values, combine: 'sum', allowed: masks(chain, -Infinity, by, bounds) });
-	const way = find(readyBy);
-	return way === null ? null : ranked(chain, soonestOf(chain, way, readyBy, find));
+	return readyFirst(chain, bounds.readyBy ?? Infinity, (by) =>
+		earliest(chain, -Infinity, by, bounds)
+	);
+}
+
+/** The most room that a way has at its least; null without a way. */
+function mostRoom(chain: Chain, readyBy: number, bounds: PlanBounds): number | null {
+	let best = earliest(chain, -Infinity, readyBy, bounds);
+	if (best === null) return null;
+	const rooms = [...new Set(chain.steps.flatMap(({ room }) => [...room]))].sort((a, b) => a - b);
+	let low = rooms.indexOf(best.room);
+	let high = rooms.length - 1;
+	while (low < high) {
+		const middle = (low + high + 1) >> 1;
+		const way = earliest(chain, rooms[middle], readyBy, bounds);
+		if (way === null) high = middle - 1;
+		else {
+			best = way;
+			low = Math.max(middle, rooms.indexOf(way.room));
+		}
+	}
+	return best.room;
 }
 
 /** Largest least room, then the largest sum of scores, then soonest. Null: no way. */
 export function surest(chain: Chain, bounds: PlanBounds = {}): RankedWay | null {
 	const readyBy = bounds.readyBy ?? Infinity;
-	const roomiest: Objective = {
-		values: chain.steps.map((step) => step.room),
-		combine: 'least',
-		allowed: masks(chain, -Infinity, readyBy, bounds)
+	const room = mostRoom(chain, readyBy, bounds);
+	if (room === null) return null;
+	const heaviest = (by: number): RankedWay | null => {
+		const starts = heaviestWay(chain, domainsOf(chain, masks(chain, room, by, bounds)));
+		return starts === null ? null : ranked(chain, starts);
 	};
-	const widest = sweep(chain, roomiest);
-	if (widest === null) return null;
-	const values = chain.steps.map((step) => step.score);
-	const find = (by: number): Way | null =>
-		sweep(chain, { values, combine: 'sum', allowed: masks(chain, widest.value, by, bounds) });
-	const way = find(readyBy);
-	return way === null ? null : ranked(chain, soonestOf(chain, way, readyBy, find));
+	const best = heaviest(readyBy);
+	return readyFirst(chain, readyBy, (by) => {
+		const way = by === readyBy ? best : heaviest(by);
+		return way !== null && way.score === best?.score ? way : null;
+	});
 }

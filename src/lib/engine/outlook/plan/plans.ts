@@ -8,7 +8,15 @@ import { planOf, type ChainStep } from './describe';
 import { gapsOf } from './gaps';
 import { chosenLaunch, positionOf } from './launch';
 import { launchClosesAfter } from './launchReady';
-import { bySoonest, bySurest, soonest, surest, type RankedWay } from './objectives';
+import {
+	bySoonest,
+	bySurest,
+	firstOutOfReach,
+	soonest,
+	surest,
+	type PlanBounds,
+	type RankedWay
+} from './objectives';
 import type { Plan, Plans } from './plan';
 import { isCoat } from './planStep';
 
@@ -31,13 +39,12 @@ interface Found {
 	readonly way: RankedWay;
 }
 
-/** Whether a chain has a way once the maxima before some coats are let go: what abrading can win at most. */
-function mayHelp({ steps, gaps }: Chain, places: readonly number[]): boolean {
-	const loose = gaps.filter(({ to, isMaximum }) => isMaximum !== true || !places.includes(to));
-	return soonest({ steps, gaps: loose }) !== null;
+/** What a plan is ranked by, and the bounds it must keep. */
+interface Wanted {
+	readonly search: (chain: Chain, bounds: PlanBounds) => RankedWay | null;
+	readonly order: (a: RankedWay, b: RankedWay) => number;
+	readonly boundsOf: (steps: readonly ChainStep[]) => PlanBounds;
 }
-
-type Search = (chain: Chain, steps: readonly ChainStep[]) => RankedWay | null;
 
 /**
  * The three plans of a job.
@@ -71,39 +78,51 @@ export function plansOf(
 		chains.set(key, made);
 		return made;
 	};
-	const plainChain = chainWith([]).chain;
-	const sets = placeSets(abradingPlaces(job.steps));
+	const placesOfJob = abradingPlaces(job.steps);
 	/** The best without abrading put in; failing that with the fewest, the best of those. */
-	const find = (search: Search, order: (a: RankedWay, b: RankedWay) => number): Found | null => {
-		for (const level of [[[]], ...sets]) {
-			const found = level.flatMap((places): Found[] => {
-				if (places.length > 0 && !mayHelp(plainChain, places)) return [];
-				const { chain, steps } = chainWith(places);
-				const way = search(chain, steps);
-				return way === null ? [] : [{ steps, way }];
-			});
-			found.sort((a, b) => order(a.way, b.way));
-			if (found.length > 0) return found[0];
+	const find = ({ search, order, boundsOf }: Wanted): Found | null => {
+		const bestOf = (level: readonly (readonly number[])[]): Found | null =>
+			level
+				.flatMap((places): Found[] => {
+					const { chain, steps } = chainWith(places);
+					const way = search(chain, boundsOf(steps));
+					return way === null ? [] : [{ steps, way }];
+				})
+				.sort((a, b) => order(a.way, b.way))[0] ?? null;
+		const without = bestOf([[]]);
+		if (without !== null) return without;
+		const { chain, steps } = chainWith([]);
+		const bounds = boundsOf(steps);
+		/** A way once the maxima before some coats are let go: what abrading can win at most. */
+		const mayHelp = (places: readonly number[]): boolean => {
+			const gaps = chain.gaps.filter(
+				({ to, isMaximum }) => isMaximum !== true || !places.includes(to)
+			);
+			return firstOutOfReach({ steps: chain.steps, gaps }, bounds) === null;
+		};
+		for (const level of placeSets(placesOfJob, mayHelp)) {
+			const found = bestOf(level);
+			if (found !== null) return found;
 		}
 		return null;
 	};
-	const told = (found: Found | null): Plan | null =>
-		found === null ? null : planOf(yard, found.steps, found.way, job.launch);
-
+	const told = (wanted: Wanted): Plan | null => {
+		const found = find(wanted);
+		return found === null ? null : planOf(yard, found.steps, found.way, job.launch);
+	};
+	const free = (): PlanBounds => ({});
 	const launch = chosenLaunch(job.launch);
 	const position = launch === null ? null : positionOf(grid, launch);
 	return {
-		soonest: told(find((chain) => soonest(chain), bySoonest)),
-		surest: told(find((chain) => surest(chain), bySurest)),
+		soonest: told({ search: soonest, order: bySoonest, boundsOf: free }),
+		surest: told({ search: surest, order: bySurest, boundsOf: free }),
 		byDate:
 			position === null
 				? null
-				: told(
-						find(
-							(chain, steps) =>
-								surest(chain, { readyBy: position, allowed: launchAllows(steps, position) }),
-							bySurest
-						)
-					)
+				: told({
+						search: surest,
+						order: bySurest,
+						boundsOf: (steps) => ({ readyBy: position, allowed: launchAllows(steps, position) })
+					})
 	};
 }
