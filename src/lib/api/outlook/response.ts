@@ -118,23 +118,27 @@ export const outlookResponseSchema = z.object({
 			readyAt: instant.nullable()
 		})
 	),
-	remedies: z.array(
-		z.object({
-			code: z.enum(REMEDY_CODES),
-			step: stepIndex,
-			/** The shut run and what shuts it. */
-			from: instant,
-			to: instant,
-			limiter,
-			/** 0: tried, and no gain. */
-			gainMinutes: z.number(),
-			opensFrom: instant.nullable(),
-			opensTo: instant.nullable(),
-			shelter: z.enum(SHELTERS).nullable(),
-			method: z.enum(METHODS).nullable(),
-			/** Rests on the usual wind limits of a method, for want of the sheet's. */
-			assumed: z.boolean()
-		})
-	)
+	remedies: z
+		.array(
+			z.object({
+				code: z.enum(REMEDY_CODES),
+				step: stepIndex,
+				/** The shut run and what shuts it. */
+				from: instant,
+				to: instant,
+				limiter,
+				/** 0: tried, and no gain. */
+				gainMinutes: z.number(),
+				opensFrom: instant.nullable(),
+				opensTo: instant.nullable(),
+				shelter: z.enum(SHELTERS).nullable(),
+				method: z.enum(METHODS).nullable(),
+				/** Rests on the usual wind limits of a method, for want of the sheet's. */
+				assumed: z.boolean()
+			})
+		)
+		.describe(
+			'What would open the shut runs of each step that is not fixed, step by step. Told are the first runs from `from` on: 96 of all steps together, shared evenly, but four of each.'
+		)
 });
 export type OutlookResponse = z.infer<typeof outlookResponseSchema>;

@@ -18,7 +18,15 @@ export interface RemedyOptions {
 	readonly end?: number;
 }
 
-/** What would open the shut runs of each step of a job that is not fixed, step by step. */
+/** Shut runs told of a job, shared among its steps, and of a step at the least. */
+const MOST_RUNS = 96;
+const FEWEST_RUNS = 4;
+
+/**
+ * What would open the shut runs of each step of a job that is not fixed, step by step: of each the
+ * first runs from an instant on, of which a job tells so many in all. Steps alike are worked out
+ * once.
+ */
 export function jobRemedies(
 	yard: YardWeather,
 	{ steps }: JobOutlook,
@@ -26,6 +34,8 @@ export function jobRemedies(
 ): (Remedy & { readonly step: number })[] {
 	const { weather, site } = yard;
 	const notBefore = positionOf(weather.grid, from);
+	const free = steps.filter(({ planStep }) => !planStep.isFixed);
+	const mostRuns = Math.max(FEWEST_RUNS, Math.floor(MOST_RUNS / Math.max(1, free.length)));
 	const known = new Map<string, FaceConditions[]>();
 	const under = (outlook: StepOutlook, shelter: ShelterName): FaceConditions[] =>
 		outlook.faces.flatMap(({ under: { face, readings = [] }, id }) => {
@@ -36,8 +46,7 @@ export function jobRemedies(
 			known.set(key, conditions);
 			return conditions;
 		});
-	return steps.flatMap((outlook, step) => {
-		if (outlook.planStep.isFixed) return [];
+	const remediesOfStep = (outlook: StepOutlook): Remedy[] => {
 		const { launchSlots, duration } = outlook.planStep;
 		const stands = outlook.faces.map((face) => face.under.shelter);
 		return remediesOf({
@@ -53,8 +62,17 @@ export function jobRemedies(
 				launchSlots === null
 					? null
 					: { starts: launchSlots.filter((slot) => slot >= notBefore), duration },
+			mostRuns,
 			from: Math.max(0, Math.ceil(notBefore - 1e-9)),
 			to: end ?? weather.grid.count
-		}).map((remedy) => ({ ...remedy, step }));
+		});
+	};
+	// Judged once where steps are alike: the same hours stand for all of them.
+	const told = new Map<StepOutlook['hours'], Remedy[]>();
+	return steps.flatMap((outlook, step) => {
+		if (outlook.planStep.isFixed) return [];
+		const remedies = told.get(outlook.hours) ?? remediesOfStep(outlook);
+		told.set(outlook.hours, remedies);
+		return remedies.map((remedy) => ({ ...remedy, step }));
 	});
 }

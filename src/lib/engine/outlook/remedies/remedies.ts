@@ -36,6 +36,8 @@ export interface RemedyInput {
 	}[];
 	/** The starts it keeps to, where it does. */
 	readonly kept: KeptStarts | null;
+	/** Shut runs told, from the first on. */
+	readonly mostRuns: number;
 	/** Slots [from, to) to answer for. */
 	readonly from: number;
 	readonly to: number;
@@ -73,16 +75,18 @@ function otherShelters({ step, site, shelters, options, kept }: RemedyInput): Al
 
 /** Remedies of the shut runs of a step's hours, run by run, the least trouble first. */
 export function remediesOf(input: RemedyInput): Remedy[] {
-	const { hours, conditions, kept, from, to } = input;
+	const { hours, conditions, kept, mostRuns, from, to } = input;
 	const { grid } = conditions[0].weather;
 	const at = (position: number): number => Math.round(grid.start + position * SLOT_SECONDS);
 	const needed = neededSlots(grid.count, kept);
-	const runs = runsOf(hours, from, to).filter(
-		(run) =>
-			run.state === 'shut' &&
-			!NO_REMEDY.includes(run.limiter) &&
-			needed.subarray(run.from, run.to).includes(1)
-	);
+	const runs = runsOf(hours, from, to)
+		.filter(
+			(run) =>
+				run.state === 'shut' &&
+				!NO_REMEDY.includes(run.limiter) &&
+				needed.subarray(run.from, run.to).includes(1)
+		)
+		.slice(0, mostRuns);
 	if (runs.length === 0) return [];
 	const alternatives = [...otherMethods(input), ...otherShelters(input)];
 	return runs.flatMap((run) => {

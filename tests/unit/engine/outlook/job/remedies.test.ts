@@ -111,3 +111,29 @@ describe('what would open a shut run', () => {
 		expect(outlook.steps[0].faces[0].id).toBe(FACE.id);
 	});
 });
+
+describe('a long list is bounded', () => {
+	// A shower every five hours, for four days.
+	const forecast = forecastOf({ precipitation: (h) => (h % 5 === 0 ? 1 : 0) });
+	const yard = yardWeather({ site: SITE, forecast, looseSand: null });
+	const dry: Partial<Step> = { limits: { rainFree: true }, times: { touchDry: 30 } };
+	const remediesOf = (count: number) => {
+		const steps = Array.from({ length: count }, () => on({ ...COAT, ...dry }));
+		const outlook = jobOutlook(yard, { steps, launch: {} }, { from: START });
+		return jobRemedies(yard, outlook, { shelters: ['tarp'], from: START });
+	};
+	const runsOfStep = (remedies: ReturnType<typeof remediesOf>, step: number): number =>
+		new Set(remedies.filter((it) => it.step === step).map(({ from }) => from)).size;
+
+	test('to the first runs of each step, the steps sharing evenly', () => {
+		const alone = remediesOf(1);
+		expect(runsOfStep(alone, 0)).toBeGreaterThan(4);
+		const many = remediesOf(24);
+		for (let step = 0; step < 24; step++) {
+			expect(runsOfStep(many, step)).toBe(4);
+			expect(many.filter((it) => it.step === step).map(({ from }) => from)).toEqual(
+				alone.slice(0, 8).map(({ from }) => from)
+			);
+		}
+	});
+});
