@@ -84,7 +84,7 @@ test('wrong places are told at their fields, and nothing typed is lost', async (
 	await page.getByLabel('e-mail').fill('juno@marram.example');
 	await page.getByLabel('passphrase').fill(PASSPHRASE);
 	await page.getByRole('button', { name: 'Send me the letter' }).click();
-	await expect(page.getByText('Type degrees from −90 to 90')).toBeVisible();
+	await expect(page.getByText('Type degrees, or degrees and minutes')).toBeVisible();
 	await expect(page.getByText('Type degrees from −180 to 180')).toBeVisible();
 	await expect(page.getByLabel('name of the yard')).toHaveValue('Tern Slip');
 	await expect(page.getByLabel('latitude')).toHaveAttribute('aria-invalid', 'true');

@@ -9,14 +9,14 @@ import {
 } from '$lib/server/access/foundYard';
 import { passphraseSchema, passphraseWeakness } from '$lib/server/access/strength';
 import { parts } from '$lib/server/composition';
-import { readForm, typedNumber } from '$lib/server/http/form';
+import { readForm, typedCoordinate, typedNumber } from '$lib/server/http/form';
 import { mailPause } from '$lib/server/http/mailLimit';
 import type { Actions, PageServerLoad } from './$types';
 
 const placeForm = z.object({
 	yard: yardPlaceSchema.shape.name,
-	latitude: typedNumber(-90, 90, 'Type degrees from −90 to 90, south negative, like 37.02.'),
-	longitude: typedNumber(-180, 180, 'Type degrees from −180 to 180, west negative, like −7.86.'),
+	latitude: typedCoordinate('latitude'),
+	longitude: typedCoordinate('longitude'),
 	elevation: typedNumber(-450, 6000, 'Type metres above the sea, like 3.')
 });
 const newcomerForm = placeForm.extend({
