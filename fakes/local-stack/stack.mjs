@@ -6,6 +6,7 @@ import { freePort, isFree } from '../../drizzle/server/ports.mjs';
 import { Children } from './children.mjs';
 import { findPostgres } from './debian.mjs';
 import { takeLock } from './exclusive.mjs';
+import { keysSecret } from './keysSecret.mjs';
 import { ensureBuild, ROOT, runToEnd } from './project.mjs';
 import { say } from './say.mjs';
 
@@ -112,6 +113,7 @@ export async function startStack({
 			HOST: '127.0.0.1',
 			PORT: String(webPort),
 			DEMO: 'true',
+			KEYS_SECRET: keysSecret(dataFolder),
 			...fakes.environment,
 			...environment
 		};
@@ -177,6 +179,8 @@ async function startFakes(children, weather, environment) {
 		Object.assign(settings, {
 			OPEN_METEO_URL: url,
 			OPEN_METEO_ENSEMBLE_URL: url,
+			OPEN_METEO_CUSTOMER_URL: url,
+			OPEN_METEO_CUSTOMER_ENSEMBLE_URL: url,
 			MET_NORWAY_URL: url,
 			FORECAST_CONTACT: 'yard@yardglass.example'
 		});

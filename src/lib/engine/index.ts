@@ -30,6 +30,7 @@ export {
 	type Member
 } from './outlook/weather/forecast';
 export {
+	hourOfDaySchema,
 	looseSandSchema,
 	siteSchema,
 	workHoursSchema,
@@ -43,6 +44,7 @@ export {
 	type SlotGrid,
 	type SlotWeather
 } from './outlook/weather/slots';
+export { isNoisy } from './outlook/hours/noise';
 export {
 	closedSpansSchema,
 	stepSchema,
@@ -195,6 +197,7 @@ export {
 	type ForecastPair,
 	type ScoredQuantity
 } from './scoring/errors';
+export { dryLiftGust } from './met/sand';
 export { PLUME_REACH, type Place, type PlumeActivity } from './met/plume';
 export {
 	plumeConflicts,

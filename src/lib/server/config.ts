@@ -16,6 +16,11 @@ export const configSchema = z.object({
 	DATABASE_URL: postgresUrl,
 	/** The address people reach the product at; form posts from elsewhere are refused. */
 	ORIGIN: z.url({ protocol: /^https?$/, error: 'is not an address like https://yard.example' }),
+	/**
+	 * Seals the yards' own keys of forecast providers; without one they cannot be given. Whoever
+	 * changes it makes those kept unreadable.
+	 */
+	KEYS_SECRET: z.string().min(32, 'is shorter than 32 characters').max(200).optional(),
 	LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'silent']).default('info'),
 	/** Shows the demo yard's accounts on the sign-in page. */
 	DEMO: z.stringbool().default(false)

@@ -66,3 +66,15 @@ export function hoursInBoth(a: WorkHours, b: WorkHours): WorkHours {
 	);
 	return weeklyOf(both.sort((one, other) => one.from - other.from));
 }
+
+/** Weekly hours outside all of these: the whole week where there are none. */
+export function hoursOutside(hours: WorkHours): WorkHours {
+	const free: Span[] = [];
+	let at = 0;
+	for (const { from, to } of weekSpans(hours)) {
+		if (from > at) free.push({ from: at, to: from });
+		at = Math.max(at, to);
+	}
+	if (at < WEEK) free.push({ from: at, to: WEEK });
+	return weeklyOf(free);
+}

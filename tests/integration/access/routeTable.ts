@@ -72,6 +72,16 @@ const OF_WHO_ASKS: Row = {
 	own: { manager: 'let in', painter: 'not allowed', owner: 'let in' }
 };
 
+/** For managers, who alone settle how the yard is. */
+const OF_MANAGER: Row = {
+	...OF_YARD,
+	own: { manager: 'let in', painter: 'not allowed', owner: 'not allowed' }
+};
+const MANAGER_ASKED_WRONGLY: Row = {
+	...OF_YARD,
+	own: { manager: 'asked wrongly', painter: 'not allowed', owner: 'not allowed' }
+};
+
 /** By what the walk calls them: method, `load` or `action <name>`, then the route. */
 export const ROUTES: Readonly<Record<string, Row>> = {
 	'load /(site)/sign-in': { ...OPEN, own: everyRole('moved on') },
@@ -101,6 +111,25 @@ export const ROUTES: Readonly<Record<string, Row>> = {
 	'load /[yard]/boats/[boat]': OF_BOAT,
 	'action queue /[yard]/boats/[boat]': BOAT_ASKED_WRONGLY,
 	'action drop /[yard]/boats/[boat]': BOAT_ASKED_WRONGLY,
+	'load /[yard]/settings': OF_YARD,
+	'load /[yard]/settings/place': OF_MANAGER,
+	'action place /[yard]/settings/place': MANAGER_ASKED_WRONGLY,
+	'load /[yard]/settings/hours': OF_MANAGER,
+	'action work /[yard]/settings/hours': MANAGER_ASKED_WRONGLY,
+	'action quiet /[yard]/settings/hours': MANAGER_ASKED_WRONGLY,
+	'action holidays /[yard]/settings/hours': MANAGER_ASKED_WRONGLY,
+	'load /[yard]/settings/wind': OF_MANAGER,
+	'action gusts /[yard]/settings/wind': MANAGER_ASKED_WRONGLY,
+	'action sand /[yard]/settings/wind': MANAGER_ASKED_WRONGLY,
+	'load /[yard]/settings/hoists': OF_MANAGER,
+	'action hoist /[yard]/settings/hoists': MANAGER_ASKED_WRONGLY,
+	'action money /[yard]/settings/hoists': MANAGER_ASKED_WRONGLY,
+	'load /[yard]/settings/shelters': OF_MANAGER,
+	'action shelters /[yard]/settings/shelters': MANAGER_ASKED_WRONGLY,
+	'load /[yard]/settings/forecast': OF_MANAGER,
+	'action source /[yard]/settings/forecast': MANAGER_ASKED_WRONGLY,
+	'action key /[yard]/settings/forecast': MANAGER_ASKED_WRONGLY,
+	'action takeKey /[yard]/settings/forecast': OF_MANAGER,
 	'load /[yard]/settings/people': OF_WHO_ASKS,
 	'action invite /[yard]/settings/people': {
 		...OF_WHO_ASKS,

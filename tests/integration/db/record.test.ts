@@ -10,7 +10,14 @@ import { createTestDatabase } from '../../setup/database';
 
 const { boats, changes, steps, yards } = schema;
 /** Kept by the product for itself, or told elsewhere: nothing of the yard's own is changed in them. */
-const UNRECORDED = ['changes', 'forecast_runs', 'outlooks', 'provider_states'];
+const UNRECORDED = [
+	'changes',
+	'forecast_keys',
+	'forecast_runs',
+	'outlooks',
+	'provider_states',
+	'stays'
+];
 
 let database: Awaited<ReturnType<typeof createTestDatabase>>;
 let web: ReturnType<typeof createDatabase>;

@@ -13,7 +13,7 @@ import { createTestDatabase } from '../../setup/database';
 
 const { boatPainters, boats, faces, forecastRuns, invitations, jobs, memberships, outlooks } =
 	schema;
-const { absences, jobWaits, planAnswers, plans, planSteps, stepPainters } = schema;
+const { absences, forecastKeys, jobWaits, planAnswers, plans, planSteps, stepPainters } = schema;
 const { providerStates, sessions, sheets, stands, stepFaces, steps, users, yards } = schema;
 /** Tables that no person's query finds anything in. */
 const OF_NOBODY = ['account_links', 'mails', 'sign_in_attempts', 'workers'];
@@ -44,7 +44,15 @@ async function fillEveryTable(): Promise<void> {
 			.insert(forecastRuns)
 			.values({ yardId, provider: 'open-meteo', issuedAt: at, fetchedAt: at, hourly });
 		await db.insert(providerStates).values({ yardId, provider: 'open-meteo' });
-		await db.insert(stands).values({ yardId, name: 'slip', position: 99 });
+		const [{ id: standId }] = await db
+			.insert(stands)
+			.values({ yardId, name: 'slip', position: 99 })
+			.returning({ id: stands.id });
+		// A stay is written by the move.
+		await db.update(boats).set({ standId }).where(eq(boats.yardId, yardId));
+		await db
+			.insert(forecastKeys)
+			.values({ yardId, provider: 'open-meteo', sealed: 'x', setBy: 'nobody' });
 		await db
 			.insert(sheets)
 			.values({ yardId, key: 'own', sheet: { ...SAMPLE_SHEETS.varnish, name: 'own' } });

@@ -56,6 +56,21 @@ export function thresholdFrictionVelocity({
 	return dry * moistureFactor(moisturePercent, clayPercent);
 }
 
+/** Air at 15 °C and 1013.25 hPa, kg/m³. */
+const STANDARD_AIR = 1.225;
+
+/** The gust at 10 m that lifts dry grains of a diameter (mm) in ordinary air, m/s. */
+export function dryLiftGust(grainDiameter: number): number {
+	return windOfFrictionVelocity(
+		thresholdFrictionVelocity({
+			grainDiameter,
+			airDensity: STANDARD_AIR,
+			moisturePercent: 0,
+			clayPercent: 0
+		})
+	);
+}
+
 /** Sand carried across a metre of front, kg/m·s. Source: White 1979, corrected form, from memory. */
 export function sandFlux(velocity: number, threshold: number, airDensity: number): number {
 	if (velocity <= threshold) return 0;

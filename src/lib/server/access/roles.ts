@@ -32,6 +32,10 @@ const PERMISSIONS = {
 	takePlan: ['manager', 'owner'],
 	/** Say another's hours and absences; everybody says their own. */
 	setTimes: ['manager'],
+	/** Change the yard's settings, its ground plan, and where boats stand. */
+	changeYard: ['manager'],
+	/** Change or take away a boat that one may see, and its faces; not where it stands. */
+	changeBoat: ['manager', 'owner'],
 	/** See everybody of the yard and who was asked, and take an invitation back. */
 	seePeople: ['manager']
 } as const satisfies Record<string, readonly Role[]>;

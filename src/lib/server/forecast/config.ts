@@ -13,6 +13,9 @@ export const forecastConfigSchema = z.object({
 	OPEN_METEO_ENSEMBLE_URL: httpUrl.default('https://ensemble-api.open-meteo.com'),
 	/** Open-Meteo's key of a paid plan; empty for the free service. */
 	OPEN_METEO_KEY: z.string().trim().max(200).default(''),
+	/** Where a yard's own key of a paid plan is good, without the path: forecast and ensemble. */
+	OPEN_METEO_CUSTOMER_URL: httpUrl.default('https://customer-api.open-meteo.com'),
+	OPEN_METEO_CUSTOMER_ENSEMBLE_URL: httpUrl.default('https://customer-ensemble-api.open-meteo.com'),
 	/** MET Norway's Weather API, without the path. */
 	MET_NORWAY_URL: httpUrl.default('https://api.met.no'),
 	/**

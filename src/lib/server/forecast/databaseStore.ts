@@ -4,10 +4,36 @@ import { forecastRuns, PROVIDERS, providerStates } from '../db/schema';
 import { prunable } from './retention';
 import type { ForecastStore } from './store';
 
-type Transaction = Parameters<Parameters<Database['transaction']>[0]>[0];
+export type Transaction = Parameters<Parameters<Database['transaction']>[0]>[0];
 
 /** Keeps our advisory locks apart from those of others in the same database. */
 const LOCK_SPACE = 0x59474c46;
+
+/** The key of a yard's lock: held by a refresh, and by whoever moves the yard. */
+const lockKey = (yard: string) => sql`${LOCK_SPACE}::int, hashtext(${yard})`;
+
+/** A refresh takes seconds; a minute at its worst. Nobody who moves a yard waits for that. */
+const MOST_WAIT = '20s';
+/** SQLSTATE of a lock that did not come in time. */
+const LOCK_NOT_AVAILABLE = '55P03';
+
+/**
+ * Waits, within a transaction, until no refresh of a yard is under way and keeps others off to its
+ * end.
+ *
+ * @returns false where one takes too long; the transaction is then spent
+ */
+export async function holdRefreshes(tx: Transaction, yard: string): Promise<boolean> {
+	await tx.execute(sql`select set_config('lock_timeout', ${MOST_WAIT}, true)`);
+	try {
+		await tx.execute(sql`select pg_advisory_xact_lock(${lockKey(yard)})`);
+		return true;
+	} catch (error) {
+		const code = (error as { cause?: { code?: unknown } }).cause?.code;
+		if (code === LOCK_NOT_AVAILABLE) return false;
+		throw error;
+	}
+}
 
 /**
  * The store on PostgreSQL. A yard's lock is an advisory lock of the transaction that also holds
@@ -20,7 +46,7 @@ export function databaseStore(db: Database | Transaction): ForecastStore {
 		withYardLock: (yard, work) =>
 			db.transaction(async (tx) => {
 				const { rows } = await tx.execute<{ locked: boolean }>(
-					sql`select pg_try_advisory_xact_lock(${LOCK_SPACE}::int, hashtext(${yard})) as locked`
+					sql`select pg_try_advisory_xact_lock(${lockKey(yard)}) as locked`
 				);
 				return rows[0]?.locked === true ? work(databaseStore(tx)) : null;
 			}),

@@ -1,9 +1,11 @@
+import { eq } from 'drizzle-orm';
 import type { Database } from '../db/client';
-import { PROVIDERS, type ProviderName, type Yard } from '../db/schema';
+import { PROVIDERS, yards, type ProviderName, type Yard } from '../db/schema';
 import { afterFailure, attemptsAllowed, CLOSED, isOpen } from './circuit';
 import type { ForecastConfig } from './config';
 import { CREDITS } from './credit';
 import { databaseStore } from './databaseStore';
+import { withOwnKey, type KeyConfig } from './keys';
 import { HTTP_TOOLS, type HttpTools } from './http/tools';
 import { metNorway } from './metNorway/provider';
 import { openMeteo } from './openMeteo/provider';
@@ -19,7 +21,7 @@ export type ForecastYard = Pick<
 
 export interface ForecastDeps {
 	db: Database;
-	config: ForecastConfig;
+	config: ForecastConfig & KeyConfig;
 	/** Clock, waiting, chance and time limits of the HTTP client, where they are not the usual ones. */
 	http?: Partial<HttpTools>;
 }
@@ -43,7 +45,7 @@ export type RefreshResult = { troubles: ProviderTrouble[] } & (
 	| { outcome: 'confirmed'; provider: ProviderName; runId: string; issuedAt: Date }
 	/** The provider may not be asked again yet; its stored run is still its latest. */
 	| { outcome: 'notDue'; provider: ProviderName; until: Date }
-	/** Another process is refreshing this yard. */
+	/** Another process is refreshing this yard, or it is being moved. */
 	| { outcome: 'busy' }
 	/** No provider answered; the last good run stays. */
 	| { outcome: 'lastGood'; provider: ProviderName; runId: string; issuedAt: Date }
@@ -67,23 +69,41 @@ const asSeconds = (date: Date): number => Math.floor(date.getTime() / 1000);
  *
  * @throws what is no expected failure of a provider: a lost database, a fault of our own
  */
-export function refreshForecast(
+export async function refreshForecast(
 	deps: ForecastDeps,
 	yard: ForecastYard,
 	now: Date
 ): Promise<RefreshResult> {
 	const tools = { ...HTTP_TOOLS, ...deps.http };
+	const config = await withOwnKey(deps.db, deps.config, yard.id);
 	return refreshWith(
 		{
-			store: databaseStore(deps.db),
+			store: whereItStands(deps.db, yard),
 			providers: {
-				'open-meteo': openMeteo(deps.config, tools),
-				'met-norway': metNorway(deps.config, tools)
+				'open-meteo': openMeteo(config, tools),
+				'met-norway': metNorway(config, tools)
 			}
 		},
 		yard,
 		now
 	);
+}
+
+/** The store, shut to a yard that has moved since it was read: its weather would be another place's. */
+function whereItStands(db: Database, yard: ForecastYard): ForecastStore {
+	const store = databaseStore(db);
+	return {
+		...store,
+		withYardLock: (id, work) =>
+			store.withYardLock(id, async (locked) => {
+				const [now] = await db.select().from(yards).where(eq(yards.id, id));
+				const stands =
+					now?.latitude === yard.latitude &&
+					now.longitude === yard.longitude &&
+					now.elevation === yard.elevation;
+				return stands ? work(locked) : null;
+			})
+	};
 }
 
 /** `refreshForecast` on given parts. */

@@ -1,8 +1,5 @@
 import { localDays, nights, SLOT_SECONDS, type LocalDay, type Site } from '../../engine';
 
-/** Local days on the Hours page. */
-const DAYS = 4;
-
 /** The quarter-hours of a page: from local midnight of today over whole local days. */
 export interface Axis {
 	/** UTC epoch seconds of slot 0. */
@@ -13,9 +10,13 @@ export interface Axis {
 	readonly offset: number;
 }
 
-/** The axis of a yard at an instant (UTC epoch seconds), before the weather's grid is known. */
-export function axisAt(timeZone: string, now: number): Omit<Axis, 'offset'> {
-	const days = localDays(timeZone, now, DAYS);
+/**
+ * The axis of a yard at an instant (UTC epoch seconds), before the weather's grid is known.
+ *
+ * @param count - local days on it
+ */
+export function axisAt(timeZone: string, now: number, count: number): Omit<Axis, 'offset'> {
+	const days = localDays(timeZone, now, count);
 	return {
 		start: days[0].start,
 		slotCount: days.reduce((sum, { slots }) => sum + slots, 0),

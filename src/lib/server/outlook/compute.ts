@@ -18,7 +18,7 @@ export interface YardWeather {
 /** A forecast as of `now` on the axis of the Hours page, before any step is judged in it. */
 export function weatherOnAxis(yard: Yard, current: CurrentForecast | null, now: Date): YardWeather {
 	const site = siteOf(yard);
-	const page = axisAt(yard.timeZone, Math.floor(now.getTime() / 1000));
+	const page = axisAt(yard.timeZone, Math.floor(now.getTime() / 1000), yard.daysAhead);
 	if (current === null) return { site, axis: { ...page, offset: 0 }, weather: null };
 	const weather = slotWeather({
 		site,

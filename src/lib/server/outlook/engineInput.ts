@@ -1,9 +1,21 @@
 import { dayStart } from '../../time/dates';
-import { hoursInBoth } from '../../time/weekly';
-import { addDays, faceAzimuth, type Face, type Site, type Step } from '../../engine';
+import { hoursInBoth, hoursOutside } from '../../time/weekly';
+import {
+	addDays,
+	faceAzimuth,
+	isNoisy,
+	SHELTERS,
+	taskOf,
+	type Face,
+	type Limits,
+	type ShelterName,
+	type Site,
+	type Step
+} from '../../engine';
 import type { QueuedStep } from '../db/queue';
 import type { FaceRow, Yard } from '../db/schema';
 import { stepRules } from '../jobs/stepRules';
+import { liftGustOf } from './launchWish';
 
 /** The yard as the engine's site. */
 export function siteOf(yard: Yard): Site {
@@ -37,21 +49,49 @@ const daysAway = (timeZone: string, { from, to }: { from: string; to: string }) 
 	to: dayStart(timeZone, addDays(to, 1))
 });
 
-/** A step as the engine's: worked when the yard is open and everybody who works on it is there. */
+/**
+ * A step as the engine's: worked when the yard is open and everybody who works on it is there, what
+ * is heard outside quiet hours, and what is lifted under the hoist's limit.
+ */
 export function stepOf(queued: QueuedStep, yard: Yard): Step {
 	const { step, sheet, nextCoating, painters, absences } = queued;
 	const own = painters.flatMap(({ workHours }) => (workHours === null ? [] : [workHours]));
+	const worked = own.reduce(hoursInBoth, yard.workHours);
+	const away = [...absences, ...yard.holidays.map(({ date }) => ({ from: date, to: date }))];
+	const { limits, times } = stepRules(step, sheet?.sheet ?? null, nextCoating);
+	const isLift = step.kind === 'lift' || step.kind === 'launch';
 	return {
 		name: step.name,
 		kind: step.kind,
 		durationMinutes: step.durationMinutes,
 		method: step.method,
-		workHours: own.reduce(hoursInBoth, yard.workHours),
-		...(absences.length === 0
-			? {}
-			: { closed: absences.map((away) => daysAway(yard.timeZone, away)) }),
-		...stepRules(step, sheet?.sheet ?? null, nextCoating)
+		workHours: isNoisy(step) ? hoursInBoth(worked, hoursOutside(yard.quietHours)) : worked,
+		...(away.length === 0 ? {} : { closed: away.map((days) => daysAway(yard.timeZone, days)) }),
+		limits: isLift ? underHoist(limits, yard) : limits,
+		times
 	};
+}
+
+/** What the rule of work says of lifting until a yard has said what its own machine bears. */
+const USUAL_LIFT_GUST = taskOf('launch').limits.gust?.max;
+
+/** Limits under the yard's hoist; a boat that asks for less wind than usual keeps the lesser. */
+function underHoist(limits: Limits, yard: Yard): Limits {
+	const own = limits.gust?.max;
+	const most = liftGustOf(yard);
+	const isUsual = own === undefined || own === USUAL_LIFT_GUST;
+	return {
+		...limits,
+		gust: { max: isUsual ? most : Math.min(own, most) },
+		windHeight: 10
+	};
+}
+
+/** Shelters that could be put up: those in the yard's stock, every kind where nobody has said. */
+export function shelterStockOf({ shelters }: Pick<Yard, 'shelters'>): readonly ShelterName[] {
+	return shelters === null
+		? SHELTERS
+		: SHELTERS.filter((name) => shelters.some(({ kind, count }) => kind === name && count > 0));
 }
 
 const FACE_WORDS: Record<FaceRow['name'], string> = {

@@ -1,11 +1,11 @@
 import { eq, inArray } from 'drizzle-orm';
 import { yardWeather, type Job, type YardWeather } from '../../engine';
-import { clockInstant } from '../../time/dates';
 import type { Database } from '../db/client';
 import { stepRows, type QueuedStep } from '../db/queue';
 import { boats, jobs, type Yard } from '../db/schema';
 import { currentForecast, type CurrentForecast } from '../forecast/current';
 import { faceOf, siteOf, stepOf } from '../outlook/engineInput';
+import { launchWishOf } from '../outlook/launchWish';
 
 /** What a job is planned in. */
 export interface PlanGround {
@@ -36,20 +36,16 @@ export async function plannedRows(db: Database, jobId: string): Promise<QueuedSt
 }
 
 /**
- * When a launch date means that the boat has to be ready: at the yard's first hour of it, and
- * where the yard is closed that day at the date's first moment.
+ * Steps of one boat's job as the engine's job.
+ *
+ * @param now - the hoists' times before it are gone
  */
-export function launchInstant({ timeZone, workHours }: Yard, date: string): number {
-	const weekday = new Date(`${date}T00:00:00Z`).getUTCDay() || 7;
-	const first = workHours
-		.filter(({ days }) => days.includes(weekday))
-		.map(({ from }) => from)
-		.sort()[0];
-	return clockInstant(timeZone, date, first ?? '00:00');
-}
-
-/** Steps of one boat's job as the engine's job. */
-export function engineJob(rows: readonly QueuedStep[], yard: Yard, launchBy: string | null): Job {
+export function engineJob(
+	rows: readonly QueuedStep[],
+	yard: Yard,
+	launchBy: string | null,
+	now: Date
+): Job {
 	return {
 		steps: rows.map((row) => {
 			const { startedAt, finishedAt, pinnedAt, shelter } = row.step;
@@ -65,10 +61,7 @@ export function engineJob(rows: readonly QueuedStep[], yard: Yard, launchBy: str
 				...(startedAt === null || finishedAt === null ? {} : { finishedAt: seconds(finishedAt) })
 			};
 		}),
-		launch: {
-			...(launchBy === null ? {} : { launchBy: launchInstant(yard, launchBy) }),
-			...(yard.dayRate === null ? {} : { dayRate: yard.dayRate })
-		}
+		launch: launchWishOf(yard, launchBy, now)
 	};
 }
 

@@ -61,7 +61,7 @@ async function judgeRows(
 		if (end === null) return `It waits for “${name}”, for which no plan fits the forecast.`;
 		from = Math.max(from, end);
 	}
-	const job = engineJob(rows, ground.yard, await launchDateOf(db, jobId));
+	const job = engineJob(rows, ground.yard, await launchDateOf(db, jobId), now);
 	return { rows, ground, from, outlook: jobOutlook(ground.weather, job, { from }) };
 }
 

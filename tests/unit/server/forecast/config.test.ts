@@ -7,6 +7,8 @@ describe('forecastConfigSchema', () => {
 		expect(forecastConfigSchema.parse({})).toEqual({
 			OPEN_METEO_URL: 'https://api.open-meteo.com',
 			OPEN_METEO_ENSEMBLE_URL: 'https://ensemble-api.open-meteo.com',
+			OPEN_METEO_CUSTOMER_URL: 'https://customer-api.open-meteo.com',
+			OPEN_METEO_CUSTOMER_ENSEMBLE_URL: 'https://customer-ensemble-api.open-meteo.com',
 			OPEN_METEO_KEY: '',
 			MET_NORWAY_URL: 'https://api.met.no',
 			FORECAST_CONTACT: ''

@@ -10,7 +10,11 @@ export const launchWishSchema = z.strictObject({
 	launchBy: z.int().optional(),
 	/** Bookable times of the hoist. */
 	launchSlots: z.array(z.int()).max(2_000).optional(),
-	dayRate: z.number().min(0).max(1_000_000).optional()
+	dayRate: z.number().min(0).max(1_000_000).optional(),
+	/** Days a launch may slip for nothing; absent: none. */
+	slipFreeDays: z.int().min(0).max(366).optional(),
+	/** By what the other days are billed, whole weeks for each begun; absent: day by day. */
+	slipPer: z.enum(['day', 'week']).optional()
 });
 export type LaunchWish = z.infer<typeof launchWishSchema>;
 
@@ -48,7 +52,7 @@ export interface Slip {
 	readonly launch: number | null;
 	/** Whole days, by dates of the yard's zone; null where no launch is wanted or none can be made. */
 	readonly days: number | null;
-	/** Days × the day rate; null with either. */
+	/** The days billed × the day rate; null with either. */
 	readonly cost: number | null;
 }
 
@@ -64,7 +68,14 @@ export function slipAt(wish: LaunchWish, timeZone: string, launch: number | null
 	const aim = chosenLaunch(wish) ?? wish.launchBy;
 	if (aim === undefined || launch === null) return { launch, days: null, cost: null };
 	const days = daysBetween(timeZone, aim, launch);
-	return { launch, days, cost: wish.dayRate === undefined ? null : days * wish.dayRate };
+	const { dayRate } = wish;
+	return { launch, days, cost: dayRate === undefined ? null : billedDays(wish, days) * dayRate };
+}
+
+/** The days of a slip that are billed. */
+function billedDays({ slipFreeDays = 0, slipPer = 'day' }: LaunchWish, days: number): number {
+	const over = Math.max(0, days - slipFreeDays);
+	return slipPer === 'day' ? over : Math.ceil(over / 7) * 7;
 }
 
 /**

@@ -31,14 +31,16 @@ export const looseSandSchema = z.strictObject({
 });
 export type LooseSand = z.infer<typeof looseSandSchema>;
 
-const hourOfDay = z.string().regex(/^([01]\d|2[0-3]):[0-5]\d$/, 'is not a time like 07:30');
+export const hourOfDaySchema = z
+	.string()
+	.regex(/^([01]\d|2[0-3]):[0-5]\d$/, 'is not a time like 07:30');
 
 /** Days 1 = Monday … 7; `to` at or before `from` runs past midnight and belongs to the day it starts on. */
 export const workHoursSchema = z.array(
 	z.strictObject({
 		days: z.array(z.int().min(1).max(7)).min(1),
-		from: hourOfDay,
-		to: hourOfDay
+		from: hourOfDaySchema,
+		to: hourOfDaySchema
 	})
 );
 export type WorkHours = z.infer<typeof workHoursSchema>;

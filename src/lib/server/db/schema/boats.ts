@@ -7,13 +7,14 @@ import {
 	pgTable,
 	primaryKey,
 	text,
+	timestamp,
 	unique,
 	uuid
 } from 'drizzle-orm/pg-core';
 import { FACE_NAMES, FINISHES, MATERIALS } from '../../../engine';
 import { users } from './people';
 import { revision } from './revision';
-import { wallOfYard, yardOfParent } from './walls';
+import { wallOfRecord, wallOfYard, yardOfParent } from './walls';
 import { stands, yards } from './yard';
 
 /** A boat ashore. `heading` is where the bow points, degrees from north clockwise. */
@@ -39,6 +40,30 @@ export const boats = pgTable(
 	]
 );
 export type Boat = typeof boats.$inferSelect;
+
+/**
+ * Where a boat stood and how it headed, from when to when; null: it still does. A trigger on
+ * `boats` alone writes it, whoever moves one and however, so that none is forgotten.
+ */
+export const stays = pgTable(
+	'stays',
+	{
+		id: uuid().primaryKey().defaultRandom(),
+		boatId: uuid()
+			.notNull()
+			.references(() => boats.id, { onDelete: 'cascade' }),
+		yardId: yardOfParent(),
+		standId: uuid().references(() => stands.id, { onDelete: 'set null' }),
+		/** As the stand was called then. */
+		standName: text().notNull(),
+		heading: doublePrecision().notNull(),
+		since: timestamp({ withTimezone: true }).notNull().defaultNow(),
+		until: timestamp({ withTimezone: true }),
+		personId: uuid().references(() => users.id, { onDelete: 'set null' }),
+		personName: text()
+	},
+	(table) => [index().on(table.boatId, table.since.desc()), wallOfRecord(table.yardId)]
+);
 
 /** Painters who may see and work on a boat. */
 export const boatPainters = pgTable(

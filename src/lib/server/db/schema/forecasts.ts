@@ -9,12 +9,13 @@ import {
 	timestamp,
 	uuid
 } from 'drizzle-orm/pg-core';
+import { PROVIDER_NAMES } from '../../../api/yard/settings';
 import type { Hourly, Member } from '../../../engine';
 import { steps } from './jobs';
 import { wallOfYard, yardOfParent } from './walls';
 import { yards } from './yard';
 
-export const PROVIDERS = ['open-meteo', 'met-norway'] as const;
+export const PROVIDERS = PROVIDER_NAMES;
 export type ProviderName = (typeof PROVIDERS)[number];
 
 /** One forecast as it came, canonical, series as arrays. Never changed once written. */
@@ -64,6 +65,24 @@ export const providerStates = pgTable(
 		primaryKey({ columns: [table.yardId, table.provider] }),
 		wallOfYard(table.yardId, 'health')
 	]
+);
+
+/**
+ * A yard's own key of a provider's paid plan, sealed (see `forecast/sealedKey.ts`): who reads the
+ * rows without the installation's secret reads nothing.
+ */
+export const forecastKeys = pgTable(
+	'forecast_keys',
+	{
+		yardId: uuid()
+			.notNull()
+			.references(() => yards.id, { onDelete: 'cascade' }),
+		provider: text({ enum: PROVIDERS }).notNull(),
+		sealed: text().notNull(),
+		setAt: timestamp({ withTimezone: true }).notNull().defaultNow(),
+		setBy: text().notNull()
+	},
+	(table) => [primaryKey({ columns: [table.yardId, table.provider] }), wallOfYard(table.yardId)]
 );
 
 /** Computed hours, keyed by a hash of the engine's whole input and its version. Can be thrown away. */

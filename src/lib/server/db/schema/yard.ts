@@ -11,6 +11,10 @@ import {
 	unique,
 	uuid
 } from 'drizzle-orm/pg-core';
+import type { Hoist } from '../../../api/yard/hoists';
+import type { Holiday } from '../../../api/yard/holidays';
+import { PROVIDER_NAMES, SLIP_UNITS } from '../../../api/yard/settings';
+import type { ShelterStock } from '../../../api/yard/shelters';
 import type { LooseSand, WorkHours } from '../../../engine';
 import { users } from './people';
 import { revision } from './revision';
@@ -30,16 +34,28 @@ export const yards = pgTable(
 		roughness: doublePrecision().notNull().default(0.03),
 		albedo: doublePrecision().notNull().default(0.2),
 		workHours: jsonb().$type<WorkHours>().notNull(),
+		quietHours: jsonb().$type<WorkHours>().notNull().default([]),
+		holidays: jsonb().$type<Holiday[]>().notNull().default([]),
 		/** Null: nobody has said whether there is loose sand. */
 		looseSand: jsonb().$type<LooseSand>(),
 		liftGust: doublePrecision().notNull().default(12),
 		highWindGust: doublePrecision().notNull().default(14.4),
+		hoists: jsonb().$type<Hoist[]>().notNull().default([]),
+		/** Null: nobody has said what there is, and every kind is thought of. */
+		shelters: jsonb().$type<ShelterStock[]>(),
 		dayRate: doublePrecision(),
 		currency: text().notNull().default('EUR'),
+		/** Days a launch may slip for nothing, and by what the others are billed. */
+		slipFreeDays: integer().notNull().default(0),
+		slipPer: text({ enum: SLIP_UNITS }).notNull().default('day'),
+		/** Local days on the Hours page. */
+		daysAhead: integer().notNull().default(4),
+		/** The ground plan: metres, and where its upper edge looks, degrees from north clockwise. */
+		groundWidth: doublePrecision().notNull().default(120),
+		groundDepth: doublePrecision().notNull().default(80),
+		groundBearing: doublePrecision().notNull().default(0),
 		/** First choice of forecast; the other stands in when it fails. */
-		forecastProvider: text({ enum: ['open-meteo', 'met-norway'] })
-			.notNull()
-			.default('open-meteo'),
+		forecastProvider: text({ enum: PROVIDER_NAMES }).notNull().default('open-meteo'),
 		/** True for the seeded yard, laid anew relative to today while nobody has touched it. */
 		demo: boolean().notNull().default(false),
 		createdAt: timestamp({ withTimezone: true }).notNull().defaultNow(),
@@ -72,7 +88,7 @@ export const memberships = pgTable(
 	]
 );
 
-/** Where a boat stands. */
+/** Where a boat stands; `x` and `y` in metres from the plan's lower left corner, null: not drawn yet. */
 export const stands = pgTable(
 	'stands',
 	{
@@ -82,6 +98,8 @@ export const stands = pgTable(
 			.references(() => yards.id, { onDelete: 'cascade' }),
 		name: text().notNull(),
 		position: integer().notNull(),
+		x: doublePrecision(),
+		y: doublePrecision(),
 		revision: revision()
 	},
 	(table) => [unique().on(table.yardId, table.name), wallOfYard(table.yardId)]
