@@ -3,6 +3,7 @@ import { building } from '$app/environment';
 import { env } from '$env/dynamic/private';
 import { composeWeb } from '$lib/server/composition';
 import { refuseUnwalled } from '$lib/server/db/health';
+import { bodyLimit } from '$lib/server/hooks/bodyLimit';
 import { failure } from '$lib/server/hooks/failure';
 import { jsonOrigin } from '$lib/server/hooks/jsonOrigin';
 import { preload } from '$lib/server/hooks/preload';
@@ -18,5 +19,5 @@ export const init: ServerInit = async () => {
 	await refuseUnwalled(composition.db);
 };
 
-export const handle = sequence(requestId, securityHeaders, session, jsonOrigin, preload);
+export const handle = sequence(requestId, securityHeaders, bodyLimit, session, jsonOrigin, preload);
 export const handleError = failure;

@@ -114,6 +114,9 @@ export async function startStack({
 			PORT: String(webPort),
 			DEMO: 'true',
 			KEYS_SECRET: keysSecret(dataFolder),
+			FILES_FOLDER: join(dataFolder, 'files'),
+			// The product holds every address to its own limit.
+			BODY_SIZE_LIMIT: 'Infinity',
 			...fakes.environment,
 			...environment
 		};

@@ -1,63 +1,13 @@
-import { z } from 'zod';
+import { fileSchema, filesSchema } from './files';
 import { healthSchema } from './health';
 import { hoursSchema } from './hours';
+import { filePaths } from './openapiFiles';
+import { answer, parameter, problems, schemaOf, SIGNED_IN, SLUG, type Json } from './openapiWords';
 import { outlookRequestSchema } from './outlook/request';
 import { outlookResponseSchema } from './outlook/response';
 import { problemSchema } from './problem';
 import { readingSchema } from './reading';
 import { refreshSchema } from './refresh';
-
-type Json = Record<string, unknown>;
-
-const schemaOf = (schema: z.ZodType, io: 'input' | 'output'): Json => {
-	// An instant's text becomes a number on the way in: what is sent is the text.
-	const schemaDocument: Json = z.toJSONSchema(schema, { io, unrepresentable: 'any' });
-	// The dialect is the OpenAPI document's own.
-	delete schemaDocument.$schema;
-	return schemaDocument;
-};
-
-const answer = (description: string, name: string): Json => ({
-	description,
-	content: { 'application/json': { schema: { $ref: `#/components/schemas/${name}` } } }
-});
-const PROBLEM_TEXT: Record<number, string> = {
-	400: 'The request is wrong; `errors` names each field',
-	401: 'Nobody is signed in',
-	403: 'The role does not allow it',
-	404: 'There is none, or it is not yours to see',
-	413: 'The body is too large',
-	415: 'The body is not JSON',
-	429: 'Too many requests; see `Retry-After`',
-	503: 'Not able to answer now'
-};
-const problems = (...statuses: number[]): Json =>
-	Object.fromEntries(
-		statuses.map((status) => [
-			String(status),
-			{
-				description: PROBLEM_TEXT[status],
-				content: {
-					'application/problem+json': { schema: { $ref: '#/components/schemas/Problem' } }
-				}
-			}
-		])
-	);
-
-const parameter = (
-	name: string,
-	where: 'path' | 'query',
-	description: string,
-	schema: Json
-): Json => ({
-	name,
-	in: where,
-	required: true,
-	description,
-	schema
-});
-const SLUG = parameter('slug', 'path', 'The yard, as in its address', { type: 'string' });
-const SIGNED_IN = [{ session: [] }];
 
 /** Every route of `/api/v1`, described. Schemas are those the routes parse and answer with. */
 export function openApiDocument(): Json {
@@ -123,6 +73,7 @@ export function openApiDocument(): Json {
 					responses: { 200: answer('What came of it', 'Refresh'), ...problems(401, 403, 404) }
 				}
 			},
+			...filePaths,
 			'/health': {
 				get: {
 					operationId: 'health',
@@ -158,6 +109,8 @@ export function openApiDocument(): Json {
 				Hours: schemaOf(hoursSchema, 'output'),
 				Reading: schemaOf(readingSchema, 'output'),
 				Refresh: schemaOf(refreshSchema, 'output'),
+				File: schemaOf(fileSchema, 'output'),
+				Files: schemaOf(filesSchema, 'output'),
 				Health: schemaOf(healthSchema, 'output'),
 				Problem: schemaOf(problemSchema, 'output')
 			}

@@ -1,6 +1,8 @@
 import { createSessions, type Sessions } from './access/sessions';
 import { readConfig, type Config } from './config';
 import { createDatabase, type Database } from './db/client';
+import { storageOf } from './files/storage/choose';
+import type { FileStorage } from './files/storage/storage';
 import { createLog, type Logger } from './log';
 
 /** What a process is made of; made once at its start, handed to whatever serves a request. */
@@ -9,6 +11,7 @@ export interface Composition {
 	readonly db: Database;
 	readonly log: Logger;
 	readonly sessions: Sessions;
+	readonly storage: FileStorage;
 	readonly close: () => Promise<void>;
 }
 
@@ -19,13 +22,18 @@ export function compose(
 	walls?: 'required'
 ): Composition {
 	const config = readConfig(environment);
+	const storage = storageOf(config);
 	const { db, pool } = createDatabase(config.DATABASE_URL, walls);
 	return {
 		config,
 		db,
 		log: createLog(config.LOG_LEVEL, process),
 		sessions: createSessions(db, { secure: config.ORIGIN.startsWith('https:') }),
-		close: () => pool.end()
+		storage,
+		close: async () => {
+			storage.close();
+			await pool.end();
+		}
 	};
 }
 

@@ -139,6 +139,15 @@ export const ROUTES: Readonly<Record<string, Row>> = {
 		...OF_YARD,
 		own: { manager: 'let in', painter: 'not allowed', owner: 'not allowed' }
 	},
+	'GET /[yard]/files/[file]/[size]': OF_BOAT,
+	'GET /api/v1/yards/[slug]/boats/[boat]/files': OF_BOAT,
+	'POST /api/v1/yards/[slug]/boats/[boat]/files': BOAT_ASKED_WRONGLY,
+	'GET /api/v1/yards/[slug]/boats/[boat]/files/[file]': OF_BOAT,
+	// None of them has added it.
+	'DELETE /api/v1/yards/[slug]/boats/[boat]/files/[file]': {
+		...OF_BOAT,
+		own: { manager: 'let in', painter: 'not allowed', owner: 'not allowed' }
+	},
 	'GET /api/v1/health': OPEN,
 
 	'GET /api/v1/openapi.json': OPEN,

@@ -1,7 +1,11 @@
-import { afterAll, beforeAll, describe, expect, test } from 'vitest';
+import { mkdtemp, rm } from 'node:fs/promises';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import { afterAll, beforeAll, beforeEach, describe, expect, test } from 'vitest';
 import { startForecastFake, type ForecastFake } from '../../../fakes/forecast/server';
 import { composeWeb, parts } from '../../../src/lib/server/composition';
 import { ROLES } from '../../../src/lib/server/db/schema';
+import { layFileOfEach } from '../../fixtures/boatFiles';
 import { layTwoYards, type TwoYards } from '../../fixtures/twoYards';
 import { createTestDatabase } from '../../setup/database';
 import { ROUTES, STATIC_PAGES, type Row } from './routeTable';
@@ -19,11 +23,16 @@ const rowOf = (door: Door): Row => ROUTES[door.name] ?? NONE;
 let database: Awaited<ReturnType<typeof createTestDatabase>>;
 let fake: ForecastFake;
 let yards: TwoYards;
+let folder: string;
+/** A file of each boat. */
+let fileOf: ReadonlyMap<string, string>;
 
 beforeAll(async () => {
 	fake = await startForecastFake({ scenario: { kind: 'story', members: 2 } });
 	database = await createTestDatabase();
+	folder = await mkdtemp(join(tmpdir(), 'yardglass-files-'));
 	const settings = {
+		FILES_FOLDER: folder,
 		DATABASE_URL: database.webUrl,
 		ORIGIN: 'http://127.0.0.1',
 		LOG_LEVEL: 'silent',
@@ -35,8 +44,13 @@ beforeAll(async () => {
 	composeWeb(settings, 'required');
 	yards = await layTwoYards(database.db);
 });
+// A door may have deleted it.
+beforeEach(async () => {
+	fileOf = await layFileOfEach(database.db, parts().storage, yards.boatOf.values());
+});
 afterAll(async () => {
 	await parts().close();
+	await rm(folder, { recursive: true });
 	await database.drop();
 	await fake.close();
 });
@@ -47,6 +61,8 @@ const at = (slug: string, step: string) => ({
 	slug,
 	step,
 	boat: yards.boatOf.get(step) ?? '',
+	file: fileOf.get(yards.boatOf.get(step) ?? '') ?? '',
+	size: 'original',
 	token: 'x'.repeat(32)
 });
 
@@ -59,7 +75,7 @@ test('a row says something of another yard where its address names one, and of a
 	for (const door of DOORS) {
 		const { otherYard, otherBoat } = rowOf(door);
 		expect(otherYard !== null, door.name).toBe(/\[(yard|slug)\]/.test(door.route));
-		expect(otherBoat !== null, door.name).toBe(/\[(step|boat)\]/.test(door.route));
+		expect(otherBoat !== null, door.name).toBe(/\[(step|boat|file)\]/.test(door.route));
 	}
 });
 

@@ -14,6 +14,7 @@ const UNRECORDED = [
 	'changes',
 	'forecast_keys',
 	'forecast_runs',
+	'kept_blobs',
 	'outlooks',
 	'provider_states',
 	'stays'

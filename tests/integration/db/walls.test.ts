@@ -1,3 +1,4 @@
+import { randomUUID } from 'node:crypto';
 import { and, eq, getTableName, is, sql } from 'drizzle-orm';
 import { PgTable } from 'drizzle-orm/pg-core';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
@@ -13,7 +14,17 @@ import { createTestDatabase } from '../../setup/database';
 
 const { boatPainters, boats, faces, forecastRuns, invitations, jobs, memberships, outlooks } =
 	schema;
-const { absences, forecastKeys, jobWaits, planAnswers, plans, planSteps, stepPainters } = schema;
+const {
+	absences,
+	files,
+	forecastKeys,
+	jobWaits,
+	keptBlobs,
+	planAnswers,
+	plans,
+	planSteps,
+	stepPainters
+} = schema;
 const { providerStates, sessions, sheets, stands, stepFaces, steps, users, yards } = schema;
 /** Tables that no person's query finds anything in. */
 const OF_NOBODY = ['account_links', 'mails', 'sign_in_attempts', 'workers'];
@@ -89,6 +100,18 @@ async function fillEveryTable(): Promise<void> {
 			.returning();
 		await db.insert(stepFaces).values({ stepId: step.id, faceId: face.id });
 		await fillPlans(step, userId);
+		await db.insert(keptBlobs).values({ yardId, sha256: 'x' });
+		await db.insert(files).values({
+			id: randomUUID(),
+			yardId,
+			boatId: boat.id,
+			kind: 'photo',
+			mediaType: 'image/jpeg',
+			bytes: 1,
+			sha256: 'x',
+			sentSha256: 'x',
+			name: 'keel.jpg'
+		});
 		await db
 			.insert(absences)
 			.values({ yardId, userId, fromDate: '2026-05-04', toDate: '2026-05-05' });

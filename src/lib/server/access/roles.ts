@@ -36,6 +36,8 @@ const PERMISSIONS = {
 	changeYard: ['manager'],
 	/** Change or take away a boat that one may see, and its faces; not where it stands. */
 	changeBoat: ['manager', 'owner'],
+	/** Add photos and PDFs to a boat that one may see; whose one may delete, says {@link mayDeleteFile}. */
+	addFile: ['manager', 'owner', 'painter'],
 	/** See everybody of the yard and who was asked, and take an invitation back. */
 	seePeople: ['manager']
 } as const satisfies Record<string, readonly Role[]>;
@@ -55,6 +57,14 @@ export function mayInvite(role: Role, as: Role, forOwnBoat: boolean): string | n
 	if (role === 'manager') return null;
 	if (as !== 'painter') return 'An owner asks painters; the yard’s manager asks everybody else.';
 	return forOwnBoat ? null : 'Say for which of your boats the painter is asked.';
+}
+
+/** Whether a member may delete a file that they may see: their own, and a manager any. */
+export function mayDeleteFile(
+	{ role, user }: { role: Role; user: Pick<SignedInUser, 'id'> },
+	file: { readonly uploadedBy: string | null }
+): boolean {
+	return role === 'manager' || file.uploadedBy === user.id;
 }
 
 /** The signed-in person; answers 401 without one. */

@@ -9,6 +9,7 @@ const TITLES: Readonly<Record<number, string>> = {
 	403: 'Not allowed',
 	404: 'Not found',
 	405: 'Not a method of this address',
+	409: 'Not as things stand',
 	413: 'Too large',
 	415: 'Not a media type of this address',
 	429: 'Too many requests',
@@ -30,7 +31,7 @@ export class ApiProblem extends Error {
 }
 
 /** The answer that tells a problem. */
-function problemResponse(problem: ApiProblem, requestId: string): Response {
+export function problemResponse(problem: ApiProblem, requestId: string): Response {
 	const body: Problem = {
 		type: 'about:blank',
 		title: TITLES[problem.status] ?? 'The request failed',

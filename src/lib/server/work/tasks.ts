@@ -6,6 +6,7 @@ import { forgetHoursBefore } from '../db/outlookCache';
 import { allBoatsOf, queuedSteps } from '../db/queue';
 import { allYards, yardById } from '../db/yards';
 import { currentForecast } from '../forecast/current';
+import { sweepFiles } from '../files/sweep';
 import { refreshForecast } from '../forecast/refresh';
 import { deliverDue, smtpSender } from '../mail/deliver';
 import { computeOutlook, weatherOnAxis } from '../outlook/compute';
@@ -16,7 +17,7 @@ const ofYard = z.object({ yardId: z.string() });
 const KEEP_HOURS_MS = 2 * 86_400_000;
 const ATTEMPTS = 4;
 
-type Parts = Pick<Composition, 'db' | 'config' | 'log' | 'sessions'>;
+type Parts = Pick<Composition, 'db' | 'config' | 'log' | 'sessions' | 'storage'>;
 
 /** Queues a yard's refresh; one waits at a time whatever asks for it. */
 export async function addRefresh(
@@ -32,7 +33,7 @@ export async function addRefresh(
 }
 
 /** The worker's tasks by name. */
-export function createTasks({ db, config, log, sessions }: Parts): TaskList {
+export function createTasks({ db, config, log, sessions, storage }: Parts): TaskList {
 	const send = smtpSender(config);
 	return {
 		/** Hourly: lays each yard's refresh at its own minute of the hour. */
@@ -70,6 +71,11 @@ export function createTasks({ db, config, log, sessions }: Parts): TaskList {
 			if (send === null) return;
 			const { sent, failed } = await deliverDue(db, send);
 			if (sent + failed > 0) log.info({ sent, failed }, 'mail delivered');
+		},
+		/** Hourly, and when a file is deleted: deletes bytes that no file has any more. */
+		async sweepFiles() {
+			const swept = await sweepFiles({ db, config, storage }, new Date());
+			if (swept > 0) log.info({ swept }, 'files swept');
 		},
 		/** Daily: forgets what can be computed again and sessions that have ended. */
 		async sweep() {

@@ -31,6 +31,7 @@ const runner = await run({
 	parsedCronItems: parseCronItems([
 		{ task: 'spreadRefreshes', match: '0 * * * *' },
 		{ task: 'deliverMail', match: '* * * * *' },
+		{ task: 'sweepFiles', match: '41 * * * *' },
 		{ task: 'sweep', match: '17 3 * * *' }
 	])
 });

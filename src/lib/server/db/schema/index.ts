@@ -6,6 +6,7 @@ export * from './sheets';
 export * from './jobs';
 export * from './plans';
 export * from './absences';
+export * from './files';
 export * from './forecasts';
 export * from './changes';
 export * from './workers';

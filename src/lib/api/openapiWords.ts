@@ -1,0 +1,55 @@
+import { z } from 'zod';
+
+/** A part of the document. */
+export type Json = Record<string, unknown>;
+
+export const schemaOf = (schema: z.ZodType, io: 'input' | 'output'): Json => {
+	// An instant's text becomes a number on the way in: what is sent is the text.
+	const schemaDocument: Json = z.toJSONSchema(schema, { io, unrepresentable: 'any' });
+	// The dialect is the OpenAPI document's own.
+	delete schemaDocument.$schema;
+	return schemaDocument;
+};
+
+export const answer = (description: string, name: string): Json => ({
+	description,
+	content: { 'application/json': { schema: { $ref: `#/components/schemas/${name}` } } }
+});
+const PROBLEM_TEXT: Record<number, string> = {
+	400: 'The request is wrong; `errors` names each field',
+	401: 'Nobody is signed in',
+	403: 'The role does not allow it',
+	404: 'There is none, or it is not yours to see',
+	409: 'Something else stands in the way',
+	413: 'The body is too large',
+	415: 'The body is of a type not taken here',
+	429: 'Too many requests; see `Retry-After`',
+	503: 'Not able to answer now'
+};
+export const problems = (...statuses: number[]): Json =>
+	Object.fromEntries(
+		statuses.map((status) => [
+			String(status),
+			{
+				description: PROBLEM_TEXT[status],
+				content: {
+					'application/problem+json': { schema: { $ref: '#/components/schemas/Problem' } }
+				}
+			}
+		])
+	);
+
+export const parameter = (
+	name: string,
+	where: 'path' | 'query',
+	description: string,
+	schema: Json
+): Json => ({
+	name,
+	in: where,
+	required: true,
+	description,
+	schema
+});
+export const SLUG = parameter('slug', 'path', 'The yard, as in its address', { type: 'string' });
+export const SIGNED_IN = [{ session: [] }];
