@@ -11,6 +11,7 @@ export const timeTableSchema = z.union([
 	z
 		.array(row)
 		.min(1)
+		.max(60)
 		.superRefine((rows, context) => {
 			for (let i = 1; i < rows.length; i++) {
 				const [before, found] = [rows[i - 1][0], rows[i][0]];
@@ -27,6 +28,9 @@ export const timeTableSchema = z.union([
 	z.null()
 ]);
 export type TimeTable = z.infer<typeof timeTableSchema>;
+
+/** Whether a time asks for no wait: the tin sets no limit, or says none is needed. */
+export const asksNoWait = (table: TimeTable): table is null | 0 => table === null || table === 0;
 
 /** The times a sheet states, in minutes against surface temperature. */
 export const TIME_NAMES = [

@@ -11,8 +11,6 @@ import type { ShelterFactors } from './face';
 import { leeShares, type LeeSector } from './lee';
 import { SLOT_SECONDS, type SlotWeather } from '../weather/slots';
 
-/** Ground roughness of a yard that states none, m (default, no source). */
-export const DEFAULT_ROUGHNESS = 0.03;
 const FACE_HEIGHT = 2;
 const KELVIN = 273.15;
 const SLOTS_PER_DAY = (24 * 3600) / SLOT_SECONDS;

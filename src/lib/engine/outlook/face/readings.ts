@@ -30,13 +30,15 @@ function valueAt(values: Float64Array, start: number, time: number): number {
 }
 
 /**
- * The residual at an instant: linear between two readings up to twelve hours apart, fading with
- * an e-folding of six hours from a lone one, and from the nearer of two that are further apart.
+ * The residual at an instant between the readings beside it: linear between two up to twelve hours
+ * apart, fading with an e-folding of six hours from a lone one, and from the nearer of two that are
+ * further apart.
  */
-function residualAt(residuals: readonly Residual[], time: number): number {
-	const after = residuals.findIndex((it) => it.time >= time);
-	const next = after < 0 ? undefined : residuals[after];
-	const before = after < 0 ? residuals[residuals.length - 1] : residuals[after - 1];
+function residualAt(
+	before: Residual | undefined,
+	next: Residual | undefined,
+	time: number
+): number {
 	if (before !== undefined && next !== undefined && next.time - before.time <= BRIDGED) {
 		const share = (time - before.time) / (next.time - before.time);
 		return before.value + share * (next.value - before.value);
@@ -76,13 +78,19 @@ export function withReadings(
 	const spread = new Float64Array(count);
 	const flags = face.flags.slice();
 	const measured = flagBit('measured');
+	let after = 0;
 	for (let i = 0; i < count; i++) {
 		const time = start + i * SLOT_SECONDS;
-		const off = bias + residualAt(residuals, time);
+		while (after < residuals.length && residuals[after].time < time) after++;
+		const before = after === 0 ? undefined : residuals[after - 1];
+		const next = after < residuals.length ? residuals[after] : undefined;
+		const off = bias + residualAt(before, next, time);
 		surfaceShaded[i] = face.surfaceShaded[i] + off;
 		surfaceSunlit[i] = face.surfaceSunlit[i] + off;
 		spread[i] = surfaceShaded[i] - face.dewPoint[i];
-		if (residuals.some((it) => Math.abs(it.time - time) <= MEASURED)) flags[i] |= measured;
+		const isNear = (it: Residual | undefined): boolean =>
+			it !== undefined && Math.abs(it.time - time) <= MEASURED;
+		if (isNear(before) || isNear(next)) flags[i] |= measured;
 	}
 	return { ...face, surfaceShaded, surfaceSunlit, spread, flags };
 }

@@ -1,7 +1,6 @@
 import { gustAtHeight, meanAtHeight } from '../../met/wind';
-import { DEFAULT_ROUGHNESS } from '../face/airAtFace';
 import { leeShares } from '../face/lee';
-import type { Site } from '../weather/site';
+import { DEFAULT_ROUGHNESS, type Site } from '../weather/site';
 import type { FaceConditions } from '../weather/slots';
 
 /** Height at which a method's wind limit is judged, m. */

@@ -8,7 +8,7 @@ import { convection, vapourTransfer } from '../../met/surface';
 import { vapourDensity } from '../../met/humidity';
 import { inSector, logProfileFactor } from '../../met/wind';
 import { SAND_STATES } from '../../vocabulary';
-import type { LooseSand } from './site';
+import { DEFAULT_ROUGHNESS, type LooseSand } from './site';
 import type { SlotWeather } from './slots';
 
 const NONE = SAND_STATES.indexOf('none');
@@ -17,7 +17,6 @@ const BLOWING = SAND_STATES.indexOf('blowing');
 const UNKNOWN = 255;
 const DRY_AIR_GAS_CONSTANT = 287.05;
 const KELVIN = 273.15;
-const DEFAULT_ROUGHNESS = 0.03;
 
 type Air = Pick<
 	SlotWeather,

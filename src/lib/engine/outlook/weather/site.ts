@@ -9,6 +9,9 @@ const isTimeZone = (name: string): boolean => {
 	}
 };
 
+/** Ground roughness of a yard that states none, m (default, no source). */
+export const DEFAULT_ROUGHNESS = 0.03;
+
 /** Where the yard is. Degrees, metres; `roughness` in metres; `albedo` of the ground, 0 to 1. */
 export const siteSchema = z.strictObject({
 	latitude: z.number().min(-90).max(90),
@@ -22,9 +25,9 @@ export type Site = z.infer<typeof siteSchema>;
 
 /** Loose sand near the yard. Sectors in degrees the wind comes from, clockwise from `from` to `to`. */
 export const looseSandSchema = z.strictObject({
-	sectors: z.array(
-		z.strictObject({ from: z.number().min(0).max(360), to: z.number().min(0).max(360) })
-	),
+	sectors: z
+		.array(z.strictObject({ from: z.number().min(0).max(360), to: z.number().min(0).max(360) }))
+		.max(36),
 	/** mm */
 	grainDiameter: z.number().min(0.05).max(2),
 	clayPercent: z.number().min(0).max(60)
@@ -36,11 +39,13 @@ export const hourOfDaySchema = z
 	.regex(/^([01]\d|2[0-3]):[0-5]\d$/, 'is not a time like 07:30');
 
 /** Days 1 = Monday … 7; `to` at or before `from` runs past midnight and belongs to the day it starts on. */
-export const workHoursSchema = z.array(
-	z.strictObject({
-		days: z.array(z.int().min(1).max(7)).min(1),
-		from: hourOfDaySchema,
-		to: hourOfDaySchema
-	})
-);
+export const workHoursSchema = z
+	.array(
+		z.strictObject({
+			days: z.array(z.int().min(1).max(7)).min(1).max(7),
+			from: hourOfDaySchema,
+			to: hourOfDaySchema
+		})
+	)
+	.max(50);
 export type WorkHours = z.infer<typeof workHoursSchema>;
