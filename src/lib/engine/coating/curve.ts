@@ -4,6 +4,9 @@ const KELVIN = 273.15;
 /** How far outside its rows a table is carried along the end segment's slope, K. */
 const REACH = 5;
 
+/** Times under this are taken as this, min: under a thousandth of a second, and no clock is infinite. */
+export const LEAST_MINUTES = 1e-5;
+
 /** Which end of a window a clock counts to. Each takes the safe side outside the rows. */
 export type ClockSide = 'earliest' | 'latest';
 
@@ -23,7 +26,7 @@ export function timeCurve(table: Exclude<TimeTable, null>): TimeCurve {
 	const rows: readonly (readonly [number, number])[] =
 		typeof table === 'number' ? [[20, table]] : table;
 	const kelvin = rows.map(([temperature]) => temperature + KELVIN);
-	const logMinutes = rows.map(([, minutes]) => Math.log(minutes));
+	const logMinutes = rows.map(([, minutes]) => Math.log(Math.max(minutes, LEAST_MINUTES)));
 	const slope = kelvin
 		.slice(1)
 		.map((t, i) => (logMinutes[i + 1] - logMinutes[i]) / (1 / t - 1 / kelvin[i]));

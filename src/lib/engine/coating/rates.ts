@@ -1,4 +1,4 @@
-import { logMinutesAt, timeCurve, type ClockSide } from './curve';
+import { LEAST_MINUTES, logMinutesAt, timeCurve, type ClockSide } from './curve';
 import type { TimeTable } from './times';
 
 /** Rates 1/τ of a time table at close, even steps of temperature, for clocks that run many times. */
@@ -21,7 +21,8 @@ const remembered = new WeakMap<object, Partial<Record<ClockSide, RateTable>>>();
  * Worked out once for a table with rows.
  */
 export function rateTable(table: Exclude<TimeTable, null>, side: ClockSide): RateTable {
-	if (typeof table === 'number') return { rates: new Float64Array(LAST + 1).fill(1 / table) };
+	if (typeof table === 'number')
+		return { rates: new Float64Array(LAST + 1).fill(1 / Math.max(table, LEAST_MINUTES)) };
 	const ofTable = remembered.get(table) ?? {};
 	remembered.set(table, ofTable);
 	ofTable[side] ??= ratesOf(table, side);

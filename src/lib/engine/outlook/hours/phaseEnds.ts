@@ -1,4 +1,5 @@
 import { cureClock, finishSlots, type CureClock } from '../../coating/cure';
+import { asksNoWait } from '../../coating/times';
 import type { FaceConditions } from '../weather/slots';
 import { phasesOf, type PhaseLimits, type PhaseTime } from './phases';
 import type { ErrorSeries } from './errors';
@@ -43,8 +44,8 @@ export function facePhases(
 	const clocks = new Map<PhaseTime, { clock: CureClock; ends: Int32Array }>();
 	const endsOf = (name: PhaseTime): Int32Array => {
 		const table = step.times[name] ?? null;
-		// The tin sets no limit: done at once.
-		if (table === null) return none;
+		// Done at once.
+		if (asksNoWait(table)) return none;
 		const known = clocks.get(name);
 		if (known !== undefined) return known.ends;
 		// Earliest clocks run on the coldest spot.

@@ -1,4 +1,4 @@
-import type { TimeName } from '../../coating/times';
+import { asksNoWait, type TimeName } from '../../coating/times';
 import { WET_STEP_KINDS } from '../../vocabulary';
 import type { FaceConditions } from '../weather/slots';
 import type { ErrorSeries } from './errors';
@@ -36,7 +36,7 @@ export function dryingIsSilent({ times, limits, kind }: Step): boolean {
 /** Whether a clock of a step asks for temperature: a constant time on no curing minimum does not. */
 function asksTemperature({ times, limits }: Step, name: PhaseTime): boolean {
 	const table = times[name] ?? null;
-	return table !== null && (typeof table !== 'number' || limits.curing !== undefined);
+	return !asksNoWait(table) && (typeof table !== 'number' || limits.curing !== undefined);
 }
 
 /**

@@ -1,5 +1,6 @@
 import { cureProgress, DONE } from '../../coating/cure';
 import { rateTable } from '../../coating/rates';
+import { asksNoWait } from '../../coating/times';
 import type { Site } from '../weather/site';
 import type { FaceConditions } from '../weather/slots';
 import { airLimits, faceLimits } from './applyLimits';
@@ -98,7 +99,7 @@ export function workableSlots(
 		const known = new Map<PhaseTime, Float64Array>();
 		const progressOf = (name: PhaseTime): Float64Array | null => {
 			const table = step.times[name] ?? null;
-			if (table === null) return null;
+			if (asksNoWait(table)) return null;
 			const progress =
 				known.get(name) ??
 				cureProgress(rateTable(table, 'earliest'), face.surfaceShaded, curingMin);

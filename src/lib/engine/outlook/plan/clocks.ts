@@ -1,6 +1,6 @@
 import { cureClock, progressAt } from '../../coating/cure';
 import type { ClockSide } from '../../coating/curve';
-import type { TimeTable } from '../../coating/times';
+import { asksNoWait, type TimeTable } from '../../coating/times';
 import type { FaceConditions } from '../weather/slots';
 
 /** Slots of a day, and of the days whose mean cycle stands for what lies past the forecast. */
@@ -138,13 +138,13 @@ export interface ClockQuestion {
 /**
  * Where a property of a coat finished (or begun) at rising slot positions is reached, on the worst
  * of the sides: the last for an earliest clock, the first for a latest one. A table of null is no
- * limit: reached at once, and never passed. +Infinity: not within what is known.
+ * limit: reached at once, and never passed. One of nought is reached at once. +Infinity: not within what is known.
  */
 export function reachedAt(question: ClockQuestion, positions: Float64Array): Float64Array {
 	const { table, sides, side, curingMin, isCarriedOn = false } = question;
 	const isEarliest = side === 'earliest';
-	if (table === null)
-		return isEarliest ? positions.slice() : new Float64Array(positions.length).fill(Infinity);
+	if (isEarliest && asksNoWait(table)) return positions.slice();
+	if (table === null) return new Float64Array(positions.length).fill(Infinity);
 	const run = question.run ?? (isEarliest ? 'shaded' : 'sunlit');
 	const worst = new Float64Array(positions.length).fill(isEarliest ? -Infinity : Infinity);
 	for (const face of sides) {

@@ -14,18 +14,38 @@ export interface HeldStep {
 
 const SLOT_MINUTES = SLOT_SECONDS / 60;
 const ROUNDING = 1e-6;
+const DAY = 86_400 / SLOT_SECONDS;
 
-/** Progress of a clock between two slot positions; NaN over an unknown temperature or off the grid. */
+/** The quickest a clock runs in the first day, progress a slot. */
+function quickest(rates: RateTable, temperature: Float64Array): number {
+	let most = 0;
+	for (let i = 0; i < Math.min(DAY, temperature.length); i++)
+		if (temperature[i] === temperature[i])
+			most = Math.max(most, SLOT_MINUTES * rateAt(rates, temperature[i]));
+	return most;
+}
+
+/**
+ * Progress of a clock between two slot positions; NaN over an unknown temperature or past the grid.
+ * Before the grid earliest clocks stand still and latest ones run as quick as on its first day.
+ */
 function progressBetween(
 	rates: RateTable,
 	temperature: Float64Array,
-	from: number,
+	begun: number,
 	to: number,
-	curingMin: number
+	curingMin: number,
+	side: Link['side']
 ): number {
+	if (begun < 0) {
+		const on = to > 0 ? progressBetween(rates, temperature, 0, to, curingMin, side) : 0;
+		const before = side === 'earliest' ? 0 : quickest(rates, temperature);
+		return on + (Math.min(to, 0) - begun) * before;
+	}
+	const from = begun;
 	const first = Math.floor(from);
 	const end = Math.ceil(to);
-	if (first < 0 || end > temperature.length) return NaN;
+	if (end > temperature.length) return NaN;
 	const progress = new Float64Array(end - first + 1);
 	for (let i = first; i < end; i++) {
 		const value = temperature[i];
@@ -53,12 +73,13 @@ function linkHolds(
 	return sides.every(({ surfaceShaded, surfaceSunlit }) => {
 		if (link.side === 'earliest')
 			return (
-				progressBetween(rates, surfaceShaded, from.finish, to.start, curingMin) >= 1 - ROUNDING
+				progressBetween(rates, surfaceShaded, from.finish, to.start, curingMin, 'earliest') >=
+				1 - ROUNDING
 			);
 		const most = 1 + ROUNDING;
 		return (
-			progressBetween(rates, surfaceSunlit, from.start, to.start, -Infinity) <= most &&
-			progressBetween(rates, surfaceSunlit, from.finish, to.finish, -Infinity) <= most
+			progressBetween(rates, surfaceSunlit, from.start, to.start, -Infinity, 'latest') <= most &&
+			progressBetween(rates, surfaceSunlit, from.finish, to.finish, -Infinity, 'latest') <= most
 		);
 	});
 }

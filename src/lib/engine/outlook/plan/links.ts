@@ -1,4 +1,4 @@
-import type { TimeTable } from '../../coating/times';
+import { asksNoWait, type TimeTable } from '../../coating/times';
 import { launchTable } from './launchReady';
 import { clearsMaximum, isCoat, waitsForLaunchReady, type PlanStep } from './planStep';
 
@@ -56,6 +56,7 @@ function linksOnFace(steps: readonly PlanStep[], to: number, id: string): Link[]
 		isMaximum = false
 	): void => {
 		if (table === undefined || table === null) return;
+		if (side === 'earliest' && asksNoWait(table)) return;
 		links.push({ from, to, face: indexOfFace(steps[from], id), side, table, isMaximum });
 	};
 	const { kind } = steps[to].step;
@@ -81,7 +82,7 @@ function launchLinks(steps: readonly PlanStep[], to: number): Link[] {
 		const ready = launchTable(earlier.step);
 		const closes = steps[to].step.kind === 'launch' ? earlier.step.times.launchMax : undefined;
 		return earlier.faces.flatMap((_, face) => [
-			...(ready === undefined || ready === null
+			...(ready === undefined || asksNoWait(ready)
 				? []
 				: [{ from, to, face, side: 'earliest', table: ready, isMaximum: false } as const]),
 			...(closes === undefined || closes === null

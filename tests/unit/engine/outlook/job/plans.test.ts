@@ -309,3 +309,50 @@ describe('chances of a plan', () => {
 		expect(outlookOf([on(wet)]).plans.soonest?.holdChance).toBeNull();
 	});
 });
+
+describe('a time of nought', () => {
+	test('asks for no wait, in plans, hours and members alike', () => {
+		const forecast = forecastOf({}, 121);
+		const members = [forecast.hourly, forecast.hourly];
+		const yard = yardWeather({ site: SITE, forecast: { ...forecast, members }, looseSand: null });
+		const wet = coat({ touchDry: 0, overcoatMin: 0, launchMin: 0 }, { limits: { rainFree: true } });
+		const { plans, steps } = jobOutlook(
+			yard,
+			{ steps: [on(wet), on(wet)], launch: {} },
+			{ from: START }
+		);
+		expect(startsOf(plans.soonest)).toEqual([8, 10]);
+		expect(plans.soonest?.holdChance).toBe(1);
+		expect(hoursOf(plans.soonest?.steps[0].earliestNext)).toBe(10);
+		expect(hoursOf(plans.soonest?.launchReady.latest)).toBe(12);
+		expect(steps[0].chances?.slots[40]).toBe(2);
+	});
+
+	test('as a maximum leaves no time, and no number that is none', () => {
+		const { plans } = outlookOf([on(coat({ overcoatMax: 0 })), on(coat({}))]);
+		expect(plans.soonest?.inserted).toBe(1);
+		expect(hoursOf(plans.soonest?.steps[0].latestNext)).toBeCloseTo(8, 3);
+	});
+});
+
+describe('the chance that a plan holds', () => {
+	test('knows coats logged before the forecast begins, on the safe side', () => {
+		const forecast = forecastOf({}, 121);
+		const members = [forecast.hourly, forecast.hourly];
+		const yard = yardWeather({ site: SITE, forecast: { ...forecast, members }, looseSand: null });
+		const chanceOf = (times: Parameters<typeof coat>[0]) =>
+			jobOutlook(
+				yard,
+				{
+					steps: [on(coat(times), { startAt: at(-26), finishedAt: at(-24) }), on(coat({}))],
+					launch: {}
+				},
+				{ from: START }
+			).plans.soonest;
+		const inside = chanceOf({ overcoatMin: 4, overcoatMax: 90 });
+		expect(inside?.holdChance).toBe(1);
+		expect(inside?.inserted).toBe(0);
+		// Thirty hours before the forecast count to the maximum.
+		expect(chanceOf({ overcoatMin: 4, overcoatMax: 30 })?.inserted).toBe(1);
+	});
+});
