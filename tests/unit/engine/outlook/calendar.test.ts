@@ -28,6 +28,27 @@ describe('local days', () => {
 		});
 	});
 
+	test.each([
+		['America/Santiago', '2026-09-05T12:00:00Z', '2026-09-06T04:00:00Z'],
+		['Africa/Cairo', '2026-04-23T12:00:00Z', '2026-04-23T22:00:00Z'],
+		['America/Havana', '2026-03-07T12:00:00Z', '2026-03-08T05:00:00Z']
+	])('where the clock jumps over midnight (%s) the day begins as it jumps', (zone, from, jump) => {
+		const [before, after] = localDays(zone, epoch(from), 2);
+		expect(before.slots).toBe(96);
+		expect(after.slots).toBe(92);
+		expect(after.start).toBe(epoch(jump));
+		expect(localDate(zone, after.start)).toBe(after.date);
+		// Work from midnight begins with the day too, not an hour before it.
+		const grid = { start: before.start, count: 96 + 92 };
+		const { length } = workMask(
+			zone,
+			[{ days: [new Date(after.date).getUTCDay() || 7], from: '00:00', to: '08:00' }],
+			undefined,
+			grid
+		).filter((it) => it === 1);
+		expect(length).toBe(7 * 4);
+	});
+
 	test('dates do not depend on the zone this process runs in', () => {
 		const before = process.env.TZ;
 		process.env.TZ = 'Europe/Paris';

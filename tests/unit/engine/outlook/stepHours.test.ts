@@ -313,3 +313,28 @@ test('a day off shuts its hours, by the word of hours', () => {
 	expect(at(shut, 30)).toBe('shut hours');
 	expect(shut.state.subarray(0, slotAt(23))).toEqual(free.state.subarray(0, slotAt(23)));
 });
+
+describe('an hour of missing rain', () => {
+	test('may have been wet: the dry hours beside it are no roomier than beside rain', () => {
+		const step = { ...COAT, limits: { rainFree: true }, times: { touchDry: 15 } };
+		const roomWith = (amount: number | null) =>
+			stepHours(step, conditionsOf({ precipitation: (h) => (h === 40 ? amount : 0) }), SITE).room;
+		const wet = roomWith(2);
+		const missing = roomWith(null);
+		for (const slot of [slotAt(37), slotAt(38), slotAt(45)])
+			expect(missing[slot]).toBeLessThanOrEqual(wet[slot]);
+		expect(missing[slotAt(38)]).toBeLessThan(1);
+	});
+});
+
+describe('a part with two sides', () => {
+	test('has no inside to warm it', () => {
+		const face = { ...TOPSIDES, azimuth: 0, bothSides: true };
+		const cold = { temperature: (h: number) => (h < 24 ? 22 : 6), dewPoint: 0 };
+		const [outside] = conditionsOf(cold, { face });
+		const [stated] = conditionsOf(cold, { face: { ...face, inside: { u: 0 } } });
+		const [hull] = conditionsOf(cold, { face: { ...face, bothSides: false } });
+		expect(outside.surfaceShaded).toEqual(stated.surfaceShaded);
+		expect(hull.surfaceShaded[slotAt(30)]).toBeGreaterThan(outside.surfaceShaded[slotAt(30)] + 1);
+	});
+});

@@ -1,5 +1,9 @@
 import { describe, expect, test } from 'vitest';
-import { flagNames } from '../../../../src/lib/engine/outlook/weather/flags';
+import {
+	dewPointFromVapourPressure,
+	saturationPressureOverIce
+} from '../../../../src/lib/engine/met/humidity';
+import { flagBit, flagNames } from '../../../../src/lib/engine/outlook/weather/flags';
 import {
 	missingVariables,
 	slotWeather,
@@ -78,6 +82,27 @@ describe('hours onto quarter-hours', () => {
 		});
 		expect(weather.dewPoint[slotAt(5)]).toBeCloseTo(10.1, 0);
 		expect(flagNames(weather.flags[slotAt(5)])).not.toContain('derived');
+	});
+
+	test('a gust worked out takes the stronger end of its hour, the stamp that ends it', () => {
+		const { windGust } = weatherOf({ windGust: undefined, windSpeed: (h) => (h === 5 ? 10 : 2) });
+		expect(windGust[slotAt(4)]).toBe(15);
+		expect(windGust[slotAt(5)]).toBe(15);
+		expect(windGust[slotAt(6)]).toBe(3);
+	});
+
+	test('a humidity below freezing is over water and flagged, unless other hours tell', () => {
+		const cold = { temperature: -8, relativeHumidity: 90 };
+		const alone = weatherOf({ ...cold, dewPoint: undefined });
+		expect(alone.relativeHumidity[8]).toBeCloseTo(90, 6);
+		expect(alone.flags[8] & flagBit('assumed')).not.toBe(0);
+		// Elsewhere 90 % comes with the dew point of 90 % over ice: 83 % over water.
+		const overIce = dewPointFromVapourPressure(0.9 * saturationPressureOverIce(-8));
+		const told = weatherOf({ ...cold, dewPoint: (h) => (h === 2 ? null : overIce) });
+		expect(told.dewPoint[8]).toBeCloseTo(overIce, 6);
+		expect(told.flags[8] & flagBit('assumed')).toBe(0);
+		const mild = weatherOf({ temperature: 8, relativeHumidity: 90, dewPoint: undefined });
+		expect(mild.flags[8] & flagBit('assumed')).toBe(0);
 	});
 
 	test('absent cloud is a clear sky, flagged assumed', () => {

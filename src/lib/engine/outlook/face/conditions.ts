@@ -6,11 +6,11 @@ import {
 	type SurfaceBody,
 	type SurfaceDrive
 } from '../../met/surface';
-import { airAtFace, DEFAULT_ROUGHNESS, inLee } from './airAtFace';
+import { airAtFace, inLee } from './airAtFace';
 import type { Face, Shelter, ShelterFactors } from './face';
 import { flagBit } from '../weather/flags';
 import { shelterFactors } from './shelter';
-import type { Site } from '../weather/site';
+import { DEFAULT_ROUGHNESS, type Site } from '../weather/site';
 import { SLOT_SECONDS, type FaceConditions, type SlotWeather } from '../weather/slots';
 import type { YardWeather } from '../weather/yardWeather';
 
@@ -28,7 +28,8 @@ function bodyOf(face: Face): SurfaceBody {
 		conductance: face.heatCapacity === undefined ? defaults.conductance : 0,
 		solarAbsorptance: face.solarAbsorptance,
 		emissivity: face.emissivity,
-		insideU: face.inside?.u ?? defaults.insideU,
+		// A part with two sides has no inside.
+		insideU: face.inside?.u ?? (face.bothSides === true ? 0 : defaults.insideU),
 		runOffDepth: RUN_OFF_DEPTH[face.finish ?? 'gloss']
 	};
 }

@@ -27,17 +27,25 @@ export interface RoomSeries {
 	readonly rooms: Float64Array;
 }
 
-/** Hours from each slot's start to the nearest wet hour, before or after; +Infinity without one. */
-function hoursToRain(hourly: Float64Array): Float64Array {
-	const out = new Float64Array(hourly.length).fill(Infinity);
+/**
+ * Hours from each slot's start to the nearest wet hour, before or after; +Infinity without one. An
+ * hour of missing rain inside the forecast may have been wet.
+ */
+function hoursToRain({ hourlyPrecipitation, knownFrom, knownTo }: SlotWeather): Float64Array {
+	const count = hourlyPrecipitation.length;
+	const mayBeWet = (i: number): boolean => {
+		const amount = hourlyPrecipitation[i];
+		return amount === amount ? amount >= WET_HOUR : i >= knownFrom && i < knownTo;
+	};
+	const out = new Float64Array(count).fill(Infinity);
 	let distance = Infinity;
-	for (let i = 0; i < hourly.length; i++) {
-		distance = hourly[i] >= WET_HOUR ? 0 : distance + HOURS_PER_SLOT;
+	for (let i = 0; i < count; i++) {
+		distance = mayBeWet(i) ? 0 : distance + HOURS_PER_SLOT;
 		out[i] = Math.max(0, distance - HOURS_PER_SLOT);
 	}
 	distance = Infinity;
-	for (let i = hourly.length - 1; i >= 0; i--) {
-		distance = hourly[i] >= WET_HOUR ? 0 : distance + HOURS_PER_SLOT;
+	for (let i = count - 1; i >= 0; i--) {
+		distance = mayBeWet(i) ? 0 : distance + HOURS_PER_SLOT;
 		if (distance < out[i]) out[i] = distance;
 	}
 	return out;
@@ -56,7 +64,7 @@ export function rainRoom(weather: SlotWeather): RoomSeries {
 	const count = hourlyPrecipitation.length;
 	const value = new Float64Array(count);
 	const rooms = new Float64Array(count);
-	const nearest = hoursToRain(hourlyPrecipitation);
+	const nearest = hoursToRain(weather);
 	for (let i = 0; i < count; i++) {
 		const amount = hourlyPrecipitation[i];
 		const chance = precipitationProbability[i];

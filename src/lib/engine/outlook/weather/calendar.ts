@@ -33,9 +33,33 @@ export function localDate(timeZone: string, epochSeconds: number): string {
 	return format.format(epochSeconds * 1000);
 }
 
-/** The instant of a wall-clock time on a local date, UTC epoch seconds. */
+const clockFormats = new Map<string, Intl.DateTimeFormat>();
+
+/** The wall clock at an instant, comparable text: yyyy-mm-dd hh:mm. */
+function wallClock(timeZone: string, epochSeconds: number): string {
+	const format =
+		clockFormats.get(timeZone) ??
+		new Intl.DateTimeFormat('en-GB', {
+			timeZone,
+			hour: '2-digit',
+			minute: '2-digit',
+			hourCycle: 'h23'
+		});
+	clockFormats.set(timeZone, format);
+	return `${localDate(timeZone, epochSeconds)} ${format.format(epochSeconds * 1000)}`;
+}
+
+/**
+ * The instant of a wall-clock time on a local date, UTC epoch seconds. A time that the clock jumps
+ * over (midnight, in some zones) is the moment it jumps.
+ */
 function instantOf(timeZone: string, date: string, time: string): number {
-	return Math.round(fromZonedTime(`${date}T${time}:00`, timeZone).getTime() / 1000);
+	let instant = Math.round(fromZonedTime(`${date}T${time}:00`, timeZone).getTime() / 1000);
+	const asked = `${date} ${time}`;
+	if (wallClock(timeZone, instant) === asked) return instant;
+	while (wallClock(timeZone, instant) < asked) instant += 60;
+	while (wallClock(timeZone, instant - 60) > asked) instant -= 60;
+	return instant;
 }
 
 /** The date so many days after a date; calendar arithmetic, no zone. */

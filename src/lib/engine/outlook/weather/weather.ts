@@ -1,8 +1,9 @@
-import { dewPointFromRelativeHumidity, saturationPressureOverWater } from '../../met/humidity';
+import { saturationPressureOverWater } from '../../met/humidity';
 import { skyLongwave } from '../../met/longwave';
 import { sunTrack } from '../../met/sun';
 import { flagBit } from './flags';
-import type { Forecast, Hourly } from './forecast';
+import { hourlyDewPoint } from './dewPoint';
+import type { Forecast } from './forecast';
 import {
 	directionSlots,
 	heldSlots,
@@ -46,19 +47,6 @@ export interface SlotWeatherInput {
 	readonly to?: number;
 }
 
-/** Dew point at the hours: as given, or from temperature and humidity over water. */
-function hourlyDewPoint(hourly: Hourly): Float64Array | null {
-	const dewPoint = valuesOf(hourly, 'dewPoint');
-	const humidity = valuesOf(hourly, 'relativeHumidity');
-	const temperature = valuesOf(hourly, 'temperature');
-	if (humidity === null || temperature === null) return dewPoint;
-	return Float64Array.from(humidity, (rh, k) =>
-		dewPoint !== null && dewPoint[k] === dewPoint[k]
-			? dewPoint[k]
-			: dewPointFromRelativeHumidity(temperature[k], rh)
-	);
-}
-
 /**
  * The forecast on quarter-hours, with the sun, the sky's long wave and the state of loose sand.
  * Never throws on a forecast its schema accepts: what is missing is NaN, what was worked out or
@@ -91,8 +79,11 @@ export function weatherUnder(
 		values === null ? unknown() : instantSlots(values, periods, grid);
 
 	const airTemperature = instant(valuesOf(hourly, 'temperature'));
-	const dewPoint = instant(hourlyDewPoint(hourly));
-	const windSpeed = instant(valuesOf(hourly, 'windSpeed'));
+	const dewPoints = hourlyDewPoint(hourly);
+	const dewPoint = instant(dewPoints?.values ?? null);
+	const givenWinds = valuesOf(hourly, 'windSpeed');
+	const windSpeed = instant(givenWinds);
+	const winds = givenWinds ?? new Float64Array(hourly.time.length).fill(NaN);
 	const givenPressure = valuesOf(hourly, 'pressure');
 	const pressure = instant(givenPressure);
 	const cloud = valuesOf(hourly, 'cloudCover');
@@ -124,13 +115,14 @@ export function weatherUnder(
 		const period = periods.ofSlot[i];
 		const inForecast = period >= 0 && !periods.gap[period];
 		if (period >= 0) flags[i] = everywhere | (periods.coarse[period] ? flagBit('coarse') : 0);
+		if (dewPoints?.assumed[period] === 1 || dewPoints?.assumed[period + 1] === 1)
+			flags[i] |= flagBit('assumed');
 		if (inForecast && cloud === null) cloudCover[i] = 0;
 		else cloudCover[i] = Math.min(1, cloudCover[i] / 100);
 		if (inForecast && pressure[i] !== pressure[i]) pressure[i] = defaultPressure;
 		if (windGust[i] !== windGust[i] && windSpeed[i] === windSpeed[i]) {
 			// Held over the hour, so from the stronger end of it.
-			const end = windSpeed[Math.min(periods.end[period], count) - 1];
-			windGust[i] = GUST_OF_MEAN * Math.max(windSpeed[periods.first[period]], end);
+			windGust[i] = GUST_OF_MEAN * Math.max(winds[period], winds[period + 1]);
 			gustDerived[i] = 1;
 			flags[i] |= derived;
 		}
