@@ -15,3 +15,11 @@ export function instantOfLocal(timeZone: string, local: string): Date | null {
 	const instant = fromZonedTime(local, timeZone);
 	return Number.isNaN(instant.getTime()) ? null : instant;
 }
+
+/** An instant as a form's local date and time ("2026-05-04T09:45") in a zone. */
+export function localOfInstant(timeZone: string, instant: string): string {
+	// Swedish writes dates as ISO 8601 does.
+	return new Intl.DateTimeFormat('sv-SE', { timeZone, dateStyle: 'short', timeStyle: 'short' })
+		.format(Date.parse(instant))
+		.replace(' ', 'T');
+}

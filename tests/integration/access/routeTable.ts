@@ -62,6 +62,17 @@ const BOAT_ASKED_WRONGLY: Row = {
 	own: everyRole('asked wrongly'),
 	otherBoat: { manager: 'asked wrongly', painter: 'not found', owner: 'not found' }
 };
+/** For managers and owners, who take plans for boats they may see. */
+const OF_WHO_PLANS: Row = {
+	...OF_YARD,
+	own: { manager: 'let in', painter: 'not allowed', owner: 'let in' },
+	otherBoat: { manager: 'let in', painter: 'not found', owner: 'not found' }
+};
+const OF_WHO_PLANS_ASKED_WRONGLY: Row = {
+	...OF_WHO_PLANS,
+	own: { manager: 'asked wrongly', painter: 'not allowed', owner: 'asked wrongly' },
+	otherBoat: { manager: 'asked wrongly', painter: 'not found', owner: 'not found' }
+};
 /** Behind a link from a mail: who holds none is told that it is over. */
 const LINK_OVER: Row = { ...OPEN, signedOut: 'not found', own: everyRole('not found') };
 /** For whoever is signed in, about themselves. */
@@ -130,6 +141,15 @@ export const ROUTES: Readonly<Record<string, Row>> = {
 	'action source /[yard]/settings/forecast': MANAGER_ASKED_WRONGLY,
 	'action key /[yard]/settings/forecast': MANAGER_ASKED_WRONGLY,
 	'action takeKey /[yard]/settings/forecast': OF_MANAGER,
+	'load /[yard]/jobs/[job]': OF_BOAT,
+	'action change /[yard]/jobs/[job]': BOAT_ASKED_WRONGLY,
+	'action order /[yard]/jobs/[job]': BOAT_ASKED_WRONGLY,
+	'action move /[yard]/jobs/[job]': BOAT_ASKED_WRONGLY,
+	'action take /[yard]/jobs/[job]': OF_WHO_PLANS_ASKED_WRONGLY,
+	'action letGo /[yard]/jobs/[job]': OF_WHO_PLANS,
+	'action answer /[yard]/jobs/[job]': BOAT_ASKED_WRONGLY,
+	'load /[yard]/jobs/[job]/steps/[step]': OF_BOAT,
+	'action default /[yard]/jobs/[job]/steps/[step]': BOAT_ASKED_WRONGLY,
 	'load /[yard]/settings/people': OF_WHO_ASKS,
 	'action invite /[yard]/settings/people': {
 		...OF_WHO_ASKS,

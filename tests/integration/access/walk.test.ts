@@ -63,6 +63,7 @@ const at = (slug: string, step: string) => ({
 	boat: yards.boatOf.get(step) ?? '',
 	file: fileOf.get(yards.boatOf.get(step) ?? '') ?? '',
 	size: 'original',
+	job: yards.jobOf.get(step) ?? '',
 	token: 'x'.repeat(32)
 });
 
@@ -75,7 +76,7 @@ test('a row says something of another yard where its address names one, and of a
 	for (const door of DOORS) {
 		const { otherYard, otherBoat } = rowOf(door);
 		expect(otherYard !== null, door.name).toBe(/\[(yard|slug)\]/.test(door.route));
-		expect(otherBoat !== null, door.name).toBe(/\[(step|boat|file)\]/.test(door.route));
+		expect(otherBoat !== null, door.name).toBe(/\[(step|boat|file|job)\]/.test(door.route));
 	}
 });
 
