@@ -3,11 +3,11 @@ import { saturationPressureOverWater, vapourDensity } from '../../src/lib/engine
 import { STEFAN_BOLTZMANN } from '../../src/lib/engine/met/longwave';
 import {
 	convection,
-	runSurface,
 	vapourTransfer,
 	type SurfaceBody,
 	type SurfaceDrive
 } from '../../src/lib/engine/met/surface';
+import { runSurface } from '../../src/lib/engine/met/surfaceRun';
 import { logProfileFactor } from '../../src/lib/engine/met/wind';
 import { readFixture } from './cases';
 

@@ -1,6 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import { STEFAN_BOLTZMANN } from '../../src/lib/engine/met/longwave';
-import { runSurface, type SurfaceBody, type SurfaceDrive } from '../../src/lib/engine/met/surface';
+import type { SurfaceBody, SurfaceDrive } from '../../src/lib/engine/met/surface';
+import { runSurface } from '../../src/lib/engine/met/surfaceRun';
 import { everyCase, has, near, num, type Ruling } from './cases';
 
 const KELVIN = 273.15;

@@ -10,12 +10,12 @@ import { MATERIAL_DEFAULTS } from '../../../../src/lib/engine/met/materials';
 import {
 	convection,
 	heatBalance,
-	runSurface,
 	saturationDensity,
 	vapourTransfer,
 	type SurfaceBody,
 	type SurfaceDrive
 } from '../../../../src/lib/engine/met/surface';
+import { runSurface } from '../../../../src/lib/engine/met/surfaceRun';
 
 const KELVIN = 273.15;
 const BODY: SurfaceBody = {

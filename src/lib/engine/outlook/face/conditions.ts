@@ -1,17 +1,18 @@
 import { beamShares, fillFaceIrradiance, skyView } from '../../met/irradiance';
-import { MATERIAL_DEFAULTS, RUN_OFF_DEPTH } from '../../met/materials';
-import {
-	runSurface,
-	type StepsPerSlot,
-	type SurfaceBody,
-	type SurfaceDrive
-} from '../../met/surface';
+import { MATERIAL_DEFAULTS, RUN_OFF_DEPTH, WET_FILM } from '../../met/materials';
+import type { SurfaceBody, SurfaceDrive } from '../../met/surface';
+import { driedFrom, runSurface, type StepsPerSlot } from '../../met/surfaceRun';
 import { airAtFace, inLee } from './airAtFace';
 import type { Face, Shelter, ShelterFactors } from './face';
 import { flagBit } from '../weather/flags';
 import { shelterFactors } from './shelter';
 import { DEFAULT_ROUGHNESS, type Site } from '../weather/site';
-import { SLOT_SECONDS, type FaceConditions, type SlotWeather } from '../weather/slots';
+import {
+	SLOT_SECONDS,
+	type FaceConditions,
+	type SlotGrid,
+	type SlotWeather
+} from '../weather/slots';
 import type { YardWeather } from '../weather/yardWeather';
 
 const DEFAULT_ALBEDO = 0.2;
@@ -78,6 +79,7 @@ function conditionsOfSide(
 	face: Face,
 	light: SideLight,
 	factors: ShelterFactors,
+	washed: Uint8Array | null,
 	stepsPerSlot: StepsPerSlot
 ): FaceConditions {
 	const roughness = site.roughness ?? DEFAULT_ROUGHNESS;
@@ -106,7 +108,8 @@ function conditionsOfSide(
 			face.inside?.temperature === undefined
 				? air.dayMean
 				: new Float64Array(count).fill(face.inside.temperature),
-		rain: air.rain
+		rain: air.rain,
+		washed
 	};
 	const body = bodyOf(face);
 	const surfaceShaded = new Float64Array(count);
@@ -117,6 +120,8 @@ function conditionsOfSide(
 		surfaceSunlit = new Float64Array(count);
 		runSurface(drive, sunlit, body, surfaceSunlit, unseenFilm, stepsPerSlot);
 	}
+	// The long wave of a run is scratch: what is asked later has its own.
+	const kept = stepsPerSlot === 1 ? drive : { ...drive, longwave: longwave.slice() };
 	const spread = new Float64Array(count);
 	for (let i = 0; i < count; i++) spread[i] = surfaceShaded[i] - air.dewPoint[i];
 
@@ -141,6 +146,10 @@ function conditionsOfSide(
 		dustReaches: !factors.dust,
 		windFactor: factors.wind,
 		lee,
+		dries:
+			stepsPerSlot === 1
+				? null
+				: (slot) => driedFrom(kept, shaded, body, slot, surfaceShaded[slot], WET_FILM),
 		flags
 	};
 }
@@ -152,19 +161,34 @@ function sidesOf(weather: SlotWeather, face: Face): Side[] {
 	return azimuths.map((azimuth) => ({ azimuth, shares: beamShares(weather, face.tilt, azimuth) }));
 }
 
+/** 1 at the first slot that begins with each washing done; null without one on the grid. */
+function washedSlots({ start, count }: SlotGrid, washedAt: readonly number[]): Uint8Array | null {
+	const slots = washedAt
+		.map((instant) => Math.ceil((instant - start) / SLOT_SECONDS))
+		.filter((slot) => slot >= 0 && slot < count);
+	if (slots.length === 0) return null;
+	const washed = new Uint8Array(count);
+	for (const slot of slots) washed[slot] = 1;
+	return washed;
+}
+
 /**
  * What a face meets under a shelter: two runs of the heat balance, shaded and sunlit. Two entries
  * where the part has two sides, the second looking the other way; else one.
+ *
+ * @param washedAt - UTC epoch seconds at which washings of it were done: they wet it to run-off
  */
 export function faceConditions(
 	weather: SlotWeather,
 	site: Site,
 	face: Face,
-	shelter: Shelter
+	shelter: Shelter,
+	washedAt: readonly number[] = []
 ): FaceConditions[] {
 	const factors = shelterFactors(shelter);
+	const washed = washedSlots(weather.grid, washedAt);
 	return sidesOf(weather, face).map((side) =>
-		conditionsOfSide(weather, site, face, lightOn(weather, site, face, side), factors, 3)
+		conditionsOfSide(weather, site, face, lightOn(weather, site, face, side), factors, washed, 3)
 	);
 }
 
@@ -175,9 +199,11 @@ export function faceConditions(
 export function memberConditions(
 	{ weather, members, site }: YardWeather,
 	face: Face,
-	shelter: Shelter
+	shelter: Shelter,
+	washedAt: readonly number[] = []
 ): FaceConditions[][] {
 	if (members.length === 0) return [];
+	const washed = washedSlots(weather.grid, washedAt);
 	const factors = shelterFactors(shelter);
 	const sides = sidesOf(weather, face).map((side) => ({
 		side,
@@ -186,7 +212,7 @@ export function memberConditions(
 	return members.map((member) =>
 		sides.map(({ side, light }) => {
 			const own = member.ghi === weather.ghi ? light : lightOn(member, site, face, side);
-			return conditionsOfSide(member, site, face, own, factors, 1);
+			return conditionsOfSide(member, site, face, own, factors, washed, 1);
 		})
 	);
 }

@@ -16,7 +16,7 @@ import { SLOT_SECONDS, type FaceConditions } from '../weather/slots';
 import type { Step, UsualErrors } from './step';
 
 /** Version of what the engine computes; part of the key under which outlooks are kept. */
-export const ENGINE_VERSION = '4';
+export const ENGINE_VERSION = '5';
 
 const SLOT_MINUTES = SLOT_SECONDS / 60;
 

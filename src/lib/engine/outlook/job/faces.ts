@@ -10,6 +10,8 @@ import type { FaceUnder } from './job';
 export interface FaceOutlook {
 	readonly id: string;
 	readonly under: FaceUnder;
+	/** UTC epoch seconds at which logged washings of it were done. */
+	readonly washedAt: readonly number[];
 	readonly sides: readonly FaceConditions[];
 	/** Usual errors on each side. */
 	readonly errors: readonly ErrorSeries[];
@@ -17,8 +19,16 @@ export interface FaceOutlook {
 	readonly members: readonly (readonly FaceConditions[])[];
 }
 
-/** Works out what faces meet, each once however many steps work on it. */
-export function faceOutlooks(yard: YardWeather, errors: ErrorSeries) {
+/**
+ * Works out what faces meet, each once however many steps work on it.
+ *
+ * @param washesOf - UTC epoch seconds at which logged washings of a face were done
+ */
+export function faceOutlooks(
+	yard: YardWeather,
+	errors: ErrorSeries,
+	washesOf: (faceId: string) => readonly number[] = () => []
+) {
 	const known = new Map<string, FaceOutlook>();
 	return (under: FaceUnder): FaceOutlook => {
 		const key = JSON.stringify(under);
@@ -27,11 +37,15 @@ export function faceOutlooks(yard: YardWeather, errors: ErrorSeries) {
 		const { face, shelter, readings = [] } = under;
 		const measured = (conditions: FaceConditions): FaceConditions =>
 			withReadings(conditions, readings);
-		const members = memberConditions(yard, face, shelter).map((sides) => sides.map(measured));
-		const sides = faceConditions(yard.weather, yard.site, face, shelter).map(measured);
+		const washedAt = washesOf(under.id);
+		const members = memberConditions(yard, face, shelter, washedAt).map((sides) =>
+			sides.map(measured)
+		);
+		const sides = faceConditions(yard.weather, yard.site, face, shelter, washedAt).map(measured);
 		const outlook: FaceOutlook = {
 			id: under.id,
 			under,
+			washedAt,
 			sides,
 			errors: sides.map((_, side) =>
 				faceErrors(

@@ -31,6 +31,15 @@ function errorsOfYard(yard: YardWeather, usualErrors?: UsualErrors) {
 	return errors;
 }
 
+/** When logged washings of a face were done, UTC epoch seconds. */
+function washesOf({ steps }: Job, faceId: string): number[] {
+	return steps.flatMap(({ step, faces, finishedAt }) =>
+		step.kind === 'wash' && finishedAt !== undefined && faces.some(({ id }) => id === faceId)
+			? [finishedAt]
+			: []
+	);
+}
+
 /**
  * The outlook of one job in a yard's weather: on one series or on one and its members alike. What
  * the members of its faces meet is worked out here and let go with the result, so that a whole
@@ -41,7 +50,7 @@ export function jobOutlook(
 	job: Job,
 	{ from, usualErrors }: JobOptions
 ): JobOutlook {
-	const faces = faceOutlooks(yard, errorsOfYard(yard, usualErrors));
+	const faces = faceOutlooks(yard, errorsOfYard(yard, usualErrors), (id) => washesOf(job, id));
 	const judge = stepOutlooks(yard, faces, from, job.launch);
 	const steps = job.steps.map(judge);
 	const plans = plansOf(yard, job, steps, judge);

@@ -38,11 +38,13 @@ export function jobRemedies(
 	const mostRuns = Math.max(FEWEST_RUNS, Math.floor(MOST_RUNS / Math.max(1, free.length)));
 	const known = new Map<string, FaceConditions[]>();
 	const under = (outlook: StepOutlook, shelter: ShelterName): FaceConditions[] =>
-		outlook.faces.flatMap(({ under: { face, readings = [] }, id }) => {
+		outlook.faces.flatMap(({ under: { face, readings = [] }, id, washedAt }) => {
 			const key = `${id} ${shelter}`;
 			const conditions =
 				known.get(key) ??
-				faceConditions(weather, site, face, shelter).map((it) => withReadings(it, readings));
+				faceConditions(weather, site, face, shelter, washedAt).map((it) =>
+					withReadings(it, readings)
+				);
 			known.set(key, conditions);
 			return conditions;
 		});

@@ -1,5 +1,6 @@
 import type { Candidates, Gap } from './chain';
 import { reachedAt } from './clocks';
+import { dryingGaps } from './drying';
 import { linksOf, type Link } from './links';
 import type { PlanStep } from './planStep';
 
@@ -40,7 +41,7 @@ export function gapsOf(steps: readonly PlanStep[]): Gap[] {
 			isMaximum: link.isMaximum
 		};
 	});
-	const gaps = merged([...inOrder, ...byClock]);
+	const gaps = merged([...inOrder, ...byClock, ...dryingGaps(steps)]);
 	return gaps.filter((gap) => !isImplied(gap, gaps, steps));
 }
 

@@ -88,6 +88,8 @@ export interface FaceConditions {
 	readonly windFactor: number;
 	/** From where the wind is broken at the stand. */
 	readonly lee: readonly LeeSector[];
+	/** The first slot start at which the face, washed by a slot's start, is dry again; +Infinity: not in sight. Null in members. */
+	readonly dries: ((slot: number) => number) | null;
 	/** Bits of SLOT_FLAGS: the weather's and the face's own. */
 	readonly flags: Uint8Array;
 }
