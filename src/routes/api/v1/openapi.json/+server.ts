@@ -1,5 +1,5 @@
 import { json } from '@sveltejs/kit';
-import { openApiDocument } from '$lib/api/openapi';
+import { openApiDocument } from '$lib/api/openapi/document';
 import { api } from '$lib/server/http/problem';
 import type { RequestHandler } from './$types';
 

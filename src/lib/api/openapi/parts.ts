@@ -1,7 +1,12 @@
 import { z } from 'zod';
 
-/** A part of the document. */
 export type Json = Record<string, unknown>;
+
+/** What one subject adds to the document. */
+export interface Part {
+	readonly paths: Json;
+	readonly schemas: Json;
+}
 
 export const schemaOf = (schema: z.ZodType, io: 'input' | 'output'): Json => {
 	// An instant's text becomes a number on the way in: what is sent is the text.
@@ -15,6 +20,12 @@ export const answer = (description: string, name: string): Json => ({
 	description,
 	content: { 'application/json': { schema: { $ref: `#/components/schemas/${name}` } } }
 });
+/** The JSON a request carries. */
+export const body = (name: string): Json => ({
+	required: true,
+	content: { 'application/json': { schema: { $ref: `#/components/schemas/${name}` } } }
+});
+
 const PROBLEM_TEXT: Record<number, string> = {
 	400: 'The request is wrong; `errors` names each field',
 	401: 'Nobody is signed in',
@@ -51,5 +62,11 @@ export const parameter = (
 	description,
 	schema
 });
+export const optional = (name: string, description: string, schema: Json): Json => ({
+	...parameter(name, 'query', description, schema),
+	required: false
+});
+export const UUID = { type: 'string', format: 'uuid' };
+export const BOAT = parameter('boat', 'path', 'The boat', UUID);
 export const SLUG = parameter('slug', 'path', 'The yard, as in its address', { type: 'string' });
 export const SIGNED_IN = [{ session: [] }];

@@ -1,0 +1,34 @@
+import { filesPart } from './files';
+import { forecastPart } from './forecast';
+import { hoursPart } from './hours';
+import { installationPart } from './installation';
+import { outlookPart } from './outlook';
+import { schemaOf, type Json, type Part } from './parts';
+import { problemSchema } from '../problem';
+
+/** One file for each subject; what a subject gains is described there. */
+const PARTS: readonly Part[] = [outlookPart, hoursPart, forecastPart, filesPart, installationPart];
+
+/** Every route of `/api/v1`, described. Schemas are those the routes parse and answer with. */
+export function openApiDocument(): Json {
+	return {
+		openapi: '3.1.0',
+		info: {
+			title: 'Yardglass',
+			version: '1',
+			description:
+				'Best hours for every queued coat from an hourly forecast. Errors are problem documents (RFC 9457). Lists answer `{ items, next }`; the same address with `.csv` gives the whole list as CSV (RFC 4180).'
+		},
+		servers: [{ url: '/api/v1' }],
+		paths: Object.assign({}, ...PARTS.map(({ paths }) => paths)) as Json,
+		components: {
+			securitySchemes: {
+				session: { type: 'apiKey', in: 'cookie', name: 'yardglass-session' }
+			},
+			schemas: {
+				...(Object.assign({}, ...PARTS.map(({ schemas }) => schemas)) as Json),
+				Problem: schemaOf(problemSchema, 'output')
+			}
+		}
+	};
+}
