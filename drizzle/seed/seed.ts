@@ -120,6 +120,12 @@ async function insertBoat(
 	}
 }
 
+/** Where the demo's stands lie: rows of four. */
+const spotOf = (position: number) => ({
+	x: 22 + (position % 4) * 26,
+	y: 62 - Math.floor(position / 4) * 22
+});
+
 async function insertYard(tx: Transaction, now: Date, today: string): Promise<void> {
 	const people = await insertPeople(tx);
 	const { id: yardId } = first(
@@ -136,7 +142,7 @@ async function insertYard(tx: Transaction, now: Date, today: string): Promise<vo
 		const { id: standId } = first(
 			await tx
 				.insert(stands)
-				.values({ yardId, name: boat.stand, position })
+				.values({ yardId, name: boat.stand, position, ...spotOf(position) })
 				.returning({ id: stands.id })
 		);
 		const ownerId = boat.owned ? (people.get('owner') ?? null) : null;

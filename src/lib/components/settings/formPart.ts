@@ -6,6 +6,7 @@ export interface ToldForm {
 	readonly message: string;
 	readonly revision: number | null;
 	readonly saved: boolean;
+	readonly asks?: boolean;
 }
 
 /** One form of a page: what it shows in its fields, what is wrong, and what it saves on. */
@@ -16,6 +17,8 @@ export interface FormPart {
 	readonly error: (field: string) => string | undefined;
 	readonly message: string;
 	readonly saved: boolean;
+	/** Whether the message is the one question before something is taken away. */
+	readonly asks: boolean;
 	readonly revision: number;
 	/** What was typed and not saved; null where nothing is. */
 	readonly typed: Record<string, string> | null;
@@ -38,6 +41,7 @@ export function formPart(
 		error: (field) => own?.errors[field],
 		message: own?.message ?? '',
 		saved: own?.saved ?? false,
+		asks: own?.asks ?? false,
 		// Told that another came first, the next save is a decision on what is there now.
 		revision: Math.max(own?.revision ?? 0, revision),
 		typed

@@ -58,6 +58,7 @@ export async function stepRows(db: Database, which: SQL | undefined) {
 			job: { id: jobs.id, name: jobs.name },
 			boat: { id: boats.id, name: boats.name, heading: boats.heading },
 			stand: stands.name,
+			lee: stands.lee,
 			sheet: sheets,
 			nextCoating: NEXT_COATING
 		})

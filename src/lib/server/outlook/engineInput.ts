@@ -29,8 +29,11 @@ export function siteOf(yard: Yard): Site {
 	};
 }
 
-/** A face of a boat that heads somewhere, as the engine's face. */
-export function faceOf(row: FaceRow, heading: number): Face {
+/** A face of a boat on its stand, as the engine's face. */
+export function faceOf(
+	row: FaceRow,
+	{ boat: { heading }, lee }: Pick<QueuedStep, 'boat' | 'lee'>
+): Face {
 	return {
 		tilt: row.tilt,
 		azimuth: faceAzimuth(heading, row.bearing),
@@ -39,7 +42,8 @@ export function faceOf(row: FaceRow, heading: number): Face {
 		material: row.material,
 		finish: row.finish,
 		bothSides: row.bothSides,
-		...(row.inside === null ? {} : { inside: row.inside })
+		...(row.inside === null ? {} : { inside: row.inside }),
+		...(lee === null || lee.length === 0 ? {} : { lee })
 	};
 }
 

@@ -72,7 +72,7 @@ export function conditionsFor(weather: SlotWeather, site: Site) {
 	const known = new Map<string, FaceConditions[]>();
 	return (queued: QueuedStep): FaceConditions[] =>
 		queued.faces.flatMap((row) => {
-			const face = faceOf(row, queued.boat.heading);
+			const face = faceOf(row, queued);
 			const key = JSON.stringify([face, queued.step.shelter]);
 			const before = known.get(key);
 			if (before !== undefined) return before;
@@ -93,7 +93,7 @@ function keyOf(queued: QueuedStep, yard: Yard, site: Site, runId: string, axis: 
 		axis.slotCount,
 		stepOf(queued, yard),
 		queued.step.shelter,
-		queued.faces.map((row) => faceOf(row, queued.boat.heading))
+		queued.faces.map((row) => faceOf(row, queued))
 	];
 	return createHash('sha256').update(JSON.stringify(input)).digest('base64url');
 }

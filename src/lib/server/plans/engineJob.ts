@@ -54,7 +54,7 @@ export function engineJob(
 				step: stepOf(row, yard),
 				faces: row.faces.map((face) => ({
 					id: face.id,
-					face: faceOf(face, row.boat.heading),
+					face: faceOf(face, row),
 					shelter
 				})),
 				...(begun === null ? {} : { startAt: seconds(begun) }),

@@ -16,7 +16,19 @@ export interface SettingsAnswer {
 	/** To save on next; null: the one the page was drawn with. */
 	readonly revision: number | null;
 	readonly saved: boolean;
+	/** Whether the message is the one question before something is taken away. */
+	readonly asks?: boolean;
 }
+
+/** A form's answer where all went well. */
+export const answerOf = (part: string): SettingsAnswer => ({
+	part,
+	values: {},
+	errors: {},
+	message: '',
+	revision: null,
+	saved: true
+});
 
 /** Settings read from a form, or what is wrong by field. */
 export type SettingsReading =

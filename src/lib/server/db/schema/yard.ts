@@ -15,7 +15,7 @@ import type { Hoist } from '../../../api/yard/hoists';
 import type { Holiday } from '../../../api/yard/holidays';
 import { PROVIDER_NAMES, SLIP_UNITS } from '../../../api/yard/settings';
 import type { ShelterStock } from '../../../api/yard/shelters';
-import type { LooseSand, WorkHours } from '../../../engine';
+import type { LeeSector, LooseSand, WorkHours } from '../../../engine';
 import { users } from './people';
 import { revision } from './revision';
 import { wallOfYard } from './walls';
@@ -100,7 +100,10 @@ export const stands = pgTable(
 		position: integer().notNull(),
 		x: doublePrecision(),
 		y: doublePrecision(),
+		/** What breaks the wind there. */
+		lee: jsonb().$type<LeeSector[]>().notNull().default([]),
 		revision: revision()
 	},
 	(table) => [unique().on(table.yardId, table.name), wallOfYard(table.yardId)]
 );
+export type StandRow = typeof stands.$inferSelect;

@@ -6,7 +6,7 @@ import { giveKey, keyOfYard, takeKey } from '$lib/server/forecast/keys';
 import { readForm } from '$lib/server/http/form';
 import { yardDocument } from '$lib/server/yard/changeYard';
 import { keyForm, readSource } from '$lib/server/yard/forecastForm';
-import { saveSettings, type SettingsAnswer } from '$lib/server/yard/settingsForm';
+import { answerOf, saveSettings } from '$lib/server/yard/settingsForm';
 import type { Actions, PageServerLoad } from './$types';
 
 export const load: PageServerLoad = async ({ locals, params }) => {
@@ -21,21 +21,12 @@ export const load: PageServerLoad = async ({ locals, params }) => {
 	};
 };
 
-const answer = (part: string): SettingsAnswer => ({
-	part,
-	values: {},
-	errors: {},
-	message: '',
-	revision: null,
-	saved: true
-});
-
 export const actions: Actions = {
 	source: (event) => saveSettings(event, 'source', readSource),
 	key: async ({ locals, params, request }) => {
 		const { db, config } = parts();
 		const membership = await requireMembership(db, locals, params.yard, 'changeYard');
-		const said = answer('key');
+		const said = answerOf('key');
 		const { data, trouble } = await readForm(request, keyForm);
 		if (trouble !== null) return fail(400, { ...said, ...trouble, saved: false });
 		if (config.KEYS_SECRET === undefined)
@@ -50,6 +41,6 @@ export const actions: Actions = {
 	takeKey: async ({ locals, params }) => {
 		const { db } = parts();
 		await takeKey(db, await requireMembership(db, locals, params.yard, 'changeYard'));
-		return answer('key');
+		return answerOf('key');
 	}
 };

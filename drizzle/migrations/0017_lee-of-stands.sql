@@ -1,0 +1,1 @@
+ALTER TABLE "stands" ADD COLUMN "lee" jsonb DEFAULT '[]'::jsonb NOT NULL;
