@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { MOST_ITEMS, USUAL_ITEMS } from '../list';
 
 export type Json = Record<string, unknown>;
 
@@ -70,3 +71,21 @@ export const UUID = { type: 'string', format: 'uuid' };
 export const BOAT = parameter('boat', 'path', 'The boat', UUID);
 export const SLUG = parameter('slug', 'path', 'The yard, as in its address', { type: 'string' });
 export const SIGNED_IN = [{ session: [] }];
+
+/** What every list can be asked, before its own filters. */
+export const LIST_PARAMETERS = [
+	optional('q', 'Words to look for', { type: 'string', maxLength: 100 }),
+	optional('limit', 'The most items of one answer', {
+		type: 'integer',
+		minimum: 1,
+		maximum: MOST_ITEMS,
+		default: USUAL_ITEMS
+	}),
+	optional('cursor', '`next` of the answer before, as it came', { type: 'string' })
+];
+
+/** A whole list as a file. */
+export const csvAnswer = (description: string): Json => ({
+	description: `${description}, as CSV (RFC 4180) in UTF-8 with a header row`,
+	content: { 'text/csv': { schema: { type: 'string' } } }
+});
