@@ -7,8 +7,7 @@ import { memberships, users, yards } from '../db/schema';
 import { laySamples } from '../sheets/samples';
 import { foundLetter, knownLetter } from '../mail/letters';
 import { post, type Writer } from '../mail/outbox';
-import { createLink, followLink } from './links';
-import { hashPassword } from './passwords';
+import { createLink, followLink, linkPayload } from './links';
 
 /** Founding a yard: its place, and its first manager. */
 
@@ -26,20 +25,18 @@ export const founderSchema = z.object({
 	name: z.string().trim().min(1, 'Type your name.').max(120, 'Use at most 120 characters.'),
 	email: z.string().trim().toLowerCase().pipe(z.email('That is not an e-mail address.'))
 });
-export type Founder = z.infer<typeof founderSchema>;
 
-const pendingSchema = z.object({
-	place: yardPlaceSchema,
-	founder: founderSchema,
-	passwordHash: z.string()
-});
+/** What waits for a link to be followed: nothing in it opens anything. */
+const pendingSchema = z.object({ place: yardPlaceSchema, email: founderSchema.shape.email });
 
 /** Hours in which a mailed founding can be finished. */
 const LINK_HOURS = 48;
 
-/** First words of addresses that are pages of the product itself. */
-const TAKEN = [
+/** First words of addresses that are pages of the product itself, or may become some. */
+export const TAKEN_SLUGS: readonly string[] = [
 	'api',
+	'schemas',
+	'join',
 	'new',
 	'you',
 	'sign-in',
@@ -70,7 +67,7 @@ async function freeSlug(db: Writer, name: string): Promise<string> {
 		.select({ slug: yards.slug })
 		.from(yards)
 		.where(or(eq(yards.slug, base), like(yards.slug, `${base}-%`)));
-	const used = new Set([...TAKEN, ...rows.map(({ slug }) => slug)]);
+	const used = new Set([...TAKEN_SLUGS, ...rows.map(({ slug }) => slug)]);
 	if (!used.has(base)) return base;
 	let number = 2;
 	while (used.has(`${base}-${number}`)) number++;
@@ -101,56 +98,57 @@ async function createYard(db: Writer, place: YardPlace, managerId: string): Prom
 }
 
 /**
- * Takes a founding by somebody who is not signed in: a mail finishes it. The answer is the same
- * whether the address has an account or not; its holder's mail says which.
+ * Takes a founding by somebody who is not signed in: a mail finishes it, and only who reads it
+ * chooses the passphrase. The answer is the same whether the address has an account or not; its
+ * holder's mail says which.
+ *
+ * @param origin - the product's address, for the link
  */
-export async function askToFound(
+export function askToFound(
 	db: Database,
-	{
-		place,
-		founder,
-		passphrase,
-		origin
-	}: {
-		place: YardPlace;
-		founder: Founder;
-		passphrase: string;
-		/** The product's address, for the link. */
-		origin: string;
-	}
+	{ place, email, origin }: { place: YardPlace; email: string; origin: string }
 ): Promise<void> {
-	// Hashed whether it will be used or not, so that both answers take as long.
-	const passwordHash = await hashPassword(passphrase);
-	await inAccounts(db, async (tx) => {
+	return inAccounts(db, async (tx) => {
 		const known = await tx
 			.select({ id: users.id })
 			.from(users)
-			.where(sql`lower(${users.email}) = ${founder.email}`);
+			.where(sql`lower(${users.email}) = ${email}`);
 		if (known.length > 0) {
-			await post(tx, knownLetter(founder.email, `${origin}/sign-in`));
+			await post(tx, knownLetter(email, `${origin}/sign-in`));
 			return;
 		}
 		const token = await createLink(tx, {
 			kind: 'foundYard',
-			payload: { place, founder, passwordHash } satisfies z.infer<typeof pendingSchema>,
+			payload: { place, email } satisfies z.infer<typeof pendingSchema>,
 			hours: LINK_HOURS
 		});
-		await post(tx, foundLetter(founder.email, place.name, `${origin}/found/${token}`));
+		await post(tx, foundLetter(email, place.name, `${origin}/found/${token}`));
 	});
+}
+
+/** What a founding's page shows; null where its link is over. */
+export async function foundingOf(
+	db: Database,
+	token: string
+): Promise<{ readonly yard: string; readonly email: string } | null> {
+	const pending = pendingSchema.safeParse(await linkPayload(db, token, 'foundYard'));
+	return pending.success ? { yard: pending.data.place.name, email: pending.data.email } : null;
 }
 
 /** Finishes a founding by its mailed link: account, yard, membership at once. Null where the link is over. */
 export function finishFounding(
 	db: Database,
-	token: string
+	token: string,
+	{ name, passwordHash }: { readonly name: string; readonly passwordHash: string }
 ): Promise<{ userId: string; slug: string } | null> {
 	return inAccounts(db, async (tx) => {
 		const link = await followLink(tx, token, 'foundYard');
-		if (link === null) return null;
-		const { place, founder, passwordHash } = pendingSchema.parse(link.payload);
+		const pending = pendingSchema.safeParse(link?.payload);
+		if (!pending.success) return null;
+		const { place, email } = pending.data;
 		const [user] = await tx
 			.insert(users)
-			.values({ email: founder.email, name: founder.name, passwordHash })
+			.values({ email, name, passwordHash })
 			.onConflictDoNothing()
 			.returning({ id: users.id });
 		// Made by another link meanwhile: that account stands, and founds again when signed in.

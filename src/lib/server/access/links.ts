@@ -36,13 +36,17 @@ const live = (token: string, kind: LinkKind) =>
 		gt(accountLinks.expiresAt, sql`now()`)
 	);
 
-/** Whether a link can still be followed. */
-export async function isLive(db: Database, token: string, kind: LinkKind): Promise<boolean> {
-	const rows = await onDuty('accounts', () =>
-		db.select({ kind: accountLinks.kind }).from(accountLinks).where(live(token, kind))
+/** What a link holds, not followed yet; undefined where it is over. */
+export async function linkPayload(db: Database, token: string, kind: LinkKind): Promise<unknown> {
+	const [row] = await onDuty('accounts', () =>
+		db.select({ payload: accountLinks.payload }).from(accountLinks).where(live(token, kind))
 	);
-	return rows.length > 0;
+	return row?.payload;
 }
+
+/** Whether a link can still be followed. */
+export const isLive = async (db: Database, token: string, kind: LinkKind): Promise<boolean> =>
+	(await linkPayload(db, token, kind)) !== undefined;
 
 /** Follows a link: gives what it holds and takes it away, so that it works once. Null where it is over. */
 export async function followLink(

@@ -7,10 +7,20 @@ import { post } from '../mail/outbox';
 import { createLink, followLink } from './links';
 import { hashPassword, verifyPassword } from './passwords';
 import type { Sessions } from './sessions';
+import { forgetTries, takeTry, type TryLimit } from './tries';
 
 const LINK_HOURS = 2;
 
-/** Mails a link for a new passphrase, where the address has an account; tells nobody whether it has. */
+/**
+ * Takes the wish for a new passphrase. A worker looks whether the address has an account: the web
+ * process cannot say, not even by how long it takes.
+ */
+export async function requestReset(db: Database, email: string): Promise<void> {
+	const payload = JSON.stringify({ email });
+	await db.execute(sql`select app_ask_worker('mailReset', ${payload}::json, ${`reset ${email}`})`);
+}
+
+/** Mails a link for a new passphrase, where the address has an account. */
 export async function askToReset(db: Database, email: string, origin: string): Promise<void> {
 	await inAccounts(db, async (tx) => {
 		const [user] = await tx
@@ -49,22 +59,42 @@ export async function resetPassphrase(
 	return userId;
 }
 
-/** Changes a passphrase that is known; false where it is not the one given. Ends every session. */
+/** Guesses at the passphrase of a session that somebody found open. */
+const GUESSES: TryLimit = { kind: 'passphrase of', most: 8, minutes: 15 };
+
+export type ShownPassphrase =
+	'right' | 'wrong' | { readonly outcome: 'paused'; readonly minutes: number };
+
+/** Whether a signed-in person knows their passphrase, within a limit of guesses. */
+export async function showPassphrase(
+	db: Database,
+	userId: string,
+	passphrase: string
+): Promise<ShownPassphrase> {
+	const minutes = await takeTry(db, GUESSES, userId);
+	if (minutes !== null) return { outcome: 'paused', minutes };
+	const [user] = await db
+		.select({ passwordHash: users.passwordHash })
+		.from(users)
+		.where(eq(users.id, userId));
+	if (!(await verifyPassword(user?.passwordHash ?? null, passphrase))) return 'wrong';
+	await forgetTries(db, GUESSES, userId);
+	return 'right';
+}
+
+/** Changes a passphrase that is known, where it is the one given, and ends every session. */
 export async function changePassphrase(
 	db: Database,
 	sessions: Sessions,
 	userId: string,
 	given: { readonly current: string; readonly next: string }
-): Promise<boolean> {
-	const [user] = await db
-		.select({ passwordHash: users.passwordHash })
-		.from(users)
-		.where(eq(users.id, userId));
-	if (!(await verifyPassword(user?.passwordHash ?? null, given.current))) return false;
+): Promise<ShownPassphrase> {
+	const shown = await showPassphrase(db, userId, given.current);
+	if (shown !== 'right') return shown;
 	await db
 		.update(users)
 		.set({ passwordHash: await hashPassword(given.next) })
 		.where(eq(users.id, userId));
 	await sessions.endAllOf(userId);
-	return true;
+	return 'right';
 }

@@ -1,10 +1,10 @@
-import { createHash } from 'node:crypto';
-import { eq, inArray, sql } from 'drizzle-orm';
+import { sql } from 'drizzle-orm';
 import { z } from 'zod';
 import { onDuty } from '../db/behalf';
 import type { Database } from '../db/client';
-import { signInAttempts, users } from '../db/schema';
+import { users } from '../db/schema';
 import { verifyPassword } from './passwords';
+import { forgetTries, giveTryBack, takeTry, type TryLimit } from './tries';
 
 export const signInSchema = z.object({
 	email: z.string().trim().toLowerCase().min(1).max(320),
@@ -12,9 +12,8 @@ export const signInSchema = z.object({
 });
 
 /** Failures allowed in a window, by e-mail and by address, before sign-in pauses. */
-const MOST_BY_EMAIL = 8;
-const MOST_BY_ADDRESS = 40;
-const WINDOW_MINUTES = 15;
+const BY_EMAIL: TryLimit = { kind: 'email', most: 8, minutes: 15 };
+const BY_ADDRESS: TryLimit = { kind: 'address', most: 40, minutes: 15 };
 
 export type SignInResult =
 	| { outcome: 'signedIn'; userId: string }
@@ -22,69 +21,28 @@ export type SignInResult =
 	| { outcome: 'refused' }
 	| { outcome: 'paused'; minutes: number };
 
-const keyOf = (kind: 'email' | 'address', value: string): string =>
-	`${kind}:${createHash('sha256').update(value).digest('hex')}`;
-
-async function failuresOf(db: Database, keys: string[]): Promise<Map<string, number>> {
-	const rows = await db
-		.select({ key: signInAttempts.key, failures: signInAttempts.failures })
-		.from(signInAttempts)
-		.where(
-			sql`${inArray(signInAttempts.key, keys)} and ${signInAttempts.windowStartedAt} > now() - make_interval(mins => ${WINDOW_MINUTES})`
-		);
-	return new Map(rows.map(({ key, failures }) => [key, failures]));
-}
-
-async function countFailure(db: Database, key: string): Promise<void> {
-	const fresh = sql`${signInAttempts.windowStartedAt} > now() - make_interval(mins => ${WINDOW_MINUTES})`;
-	await db
-		.insert(signInAttempts)
-		.values({ key, failures: 1 })
-		.onConflictDoUpdate({
-			target: signInAttempts.key,
-			set: {
-				failures: sql`case when ${fresh} then ${signInAttempts.failures} + 1 else 1 end`,
-				windowStartedAt: sql`case when ${fresh} then ${signInAttempts.windowStartedAt} else now() end`
-			}
-		});
-}
-
 /**
  * Checks an e-mail and passphrase. Too many failures of one e-mail or one address pause it, whether
  * the e-mail exists or not, and a right passphrase within the pause is not looked at.
  *
  * @param address - the network address the attempt comes from
  */
-export function signIn(
-	db: Database,
-	given: z.infer<typeof signInSchema>,
-	address: string
-): Promise<SignInResult> {
-	return onDuty('accounts', () => check(db, given, address));
-}
-
-async function check(
+export async function signIn(
 	db: Database,
 	{ email, password }: z.infer<typeof signInSchema>,
 	address: string
 ): Promise<SignInResult> {
-	const byEmail = keyOf('email', email);
-	const byAddress = keyOf('address', address);
-	const failures = await failuresOf(db, [byEmail, byAddress]);
-	if (
-		(failures.get(byEmail) ?? 0) >= MOST_BY_EMAIL ||
-		(failures.get(byAddress) ?? 0) >= MOST_BY_ADDRESS
-	)
-		return { outcome: 'paused', minutes: WINDOW_MINUTES };
-	const [user] = await db
-		.select({ id: users.id, passwordHash: users.passwordHash })
-		.from(users)
-		.where(sql`lower(${users.email}) = ${email}`);
+	const waits = await Promise.all([takeTry(db, BY_EMAIL, email), takeTry(db, BY_ADDRESS, address)]);
+	const minutes = Math.max(...waits.map((wait) => wait ?? 0));
+	if (minutes > 0) return { outcome: 'paused', minutes };
+	const [user] = await onDuty('accounts', () =>
+		db
+			.select({ id: users.id, passwordHash: users.passwordHash })
+			.from(users)
+			.where(sql`lower(${users.email}) = ${email}`)
+	);
 	const matches = await verifyPassword(user?.passwordHash ?? null, password);
-	if (user === undefined || !matches) {
-		await Promise.all([countFailure(db, byEmail), countFailure(db, byAddress)]);
-		return { outcome: 'refused' };
-	}
-	await db.delete(signInAttempts).where(eq(signInAttempts.key, byEmail));
+	if (user === undefined || !matches) return { outcome: 'refused' };
+	await Promise.all([forgetTries(db, BY_EMAIL, email), giveTryBack(db, BY_ADDRESS, address)]);
 	return { outcome: 'signedIn', userId: user.id };
 }

@@ -6,6 +6,8 @@ import { z } from 'zod';
 /** Guesses it should take: 3 of the judge's 0 to 4, "safe from an attack on a stolen table for a while". */
 const LEAST_SCORE = 3;
 const SHORTEST = 8;
+/** Judging takes longer with the square of the length; what is strong so far stays so. */
+const MOST_JUDGED = 64;
 
 let judge: ZxcvbnFactory | null = null;
 
@@ -28,7 +30,7 @@ function judgeOf(): ZxcvbnFactory {
 export function passphraseWeakness(passphrase: string, known: readonly string[]): string | null {
 	if (passphrase.length < SHORTEST)
 		return `Use ${SHORTEST} characters or more; four or five words do well.`;
-	const { score, feedback } = judgeOf().check(passphrase, [...known]);
+	const { score, feedback } = judgeOf().check(passphrase.slice(0, MOST_JUDGED), [...known]);
 	if (score >= LEAST_SCORE) return null;
 	const why = feedback.warning ?? '';
 	return `That is easily guessed. ${why === '' ? '' : `${why.replace(/\.?$/, '.')} `}Four or five words that do not belong together do well.`;

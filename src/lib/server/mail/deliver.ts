@@ -1,4 +1,4 @@
-import { and, asc, eq, isNull, lt, lte, sql } from 'drizzle-orm';
+import { and, asc, eq, inArray, isNull, lt, lte, sql } from 'drizzle-orm';
 import { createTransport } from 'nodemailer';
 import type { Database } from '../db/client';
 import { mails, type Mail } from '../db/schema';
@@ -35,10 +35,53 @@ export function pauseAfter(attempts: number): number {
 	return Math.min(FIRST_PAUSE_SECONDS * 2 ** (attempts - 1), LONGEST_PAUSE_SECONDS);
 }
 
+/** How long a worker that took a mail has it for itself. */
+const LEASE_MINUTES = 5;
+
+/** Takes the next due mail for this worker: none other sees it until the lease is over. */
+async function takeDue(db: Database): Promise<Mail | null> {
+	const next = db
+		.select({ id: mails.id })
+		.from(mails)
+		.where(
+			and(isNull(mails.sentAt), lte(mails.nextTryAt, sql`now()`), lt(mails.attempts, MOST_ATTEMPTS))
+		)
+		.orderBy(asc(mails.nextTryAt))
+		.limit(1)
+		.for('update', { skipLocked: true });
+	const [mail] = await db
+		.update(mails)
+		.set({
+			attempts: sql`${mails.attempts} + 1`,
+			nextTryAt: sql`now() + make_interval(mins => ${LEASE_MINUTES})`
+		})
+		.where(inArray(mails.id, next))
+		.returning();
+	return mail ?? null;
+}
+
+/** Whether a mail server has said that it will never take this mail. */
+function isForGood(error: unknown): boolean {
+	const code = error instanceof Error && 'responseCode' in error ? error.responseCode : null;
+	return typeof code === 'number' && code >= 500 && code < 600;
+}
+
+async function noteFailure(db: Database, mail: Mail, error: unknown): Promise<void> {
+	const attempts = isForGood(error) ? MOST_ATTEMPTS : mail.attempts;
+	await db
+		.update(mails)
+		.set({
+			attempts,
+			nextTryAt: sql`now() + make_interval(secs => ${pauseAfter(mail.attempts)})`,
+			lastError: error instanceof Error ? error.message.slice(0, 500) : 'unknown'
+		})
+		.where(eq(mails.id, mail.id));
+}
+
 /**
- * Sends what is due in the outbox, each mail in a transaction of its own that holds its row: one
- * worker at a time has it, and one that dies lets it go. A server that took the mail of a worker
- * that died before writing it down gets it again, under the same Message-ID.
+ * Sends what is due in the outbox. A worker takes a mail for some minutes and holds nothing while
+ * it talks to the server; where it dies, another gets the mail afterwards, under the same
+ * Message-ID. A mail that was taken keeps nothing of its text: links in it open things.
  *
  * @returns how many were taken, and how many failed
  */
@@ -49,44 +92,20 @@ export async function deliverDue(
 	let sent = 0;
 	let failed = 0;
 	for (let i = 0; i < BATCH; i++) {
-		const outcome = await db.transaction(async (tx) => {
-			const [mail] = await tx
-				.select()
-				.from(mails)
-				.where(
-					and(
-						isNull(mails.sentAt),
-						lte(mails.nextTryAt, sql`now()`),
-						lt(mails.attempts, MOST_ATTEMPTS)
-					)
-				)
-				.orderBy(asc(mails.nextTryAt))
-				.limit(1)
-				.for('update', { skipLocked: true });
-			if (mail === undefined) return 'none';
-			try {
-				await send(mail);
-			} catch (error) {
-				const attempts = mail.attempts + 1;
-				await tx
-					.update(mails)
-					.set({
-						attempts,
-						nextTryAt: sql`now() + make_interval(secs => ${pauseAfter(attempts)})`,
-						lastError: error instanceof Error ? error.message.slice(0, 500) : 'unknown'
-					})
-					.where(eq(mails.id, mail.id));
-				return 'failed';
-			}
-			await tx
-				.update(mails)
-				.set({ sentAt: sql`now()`, attempts: mail.attempts + 1, lastError: null })
-				.where(eq(mails.id, mail.id));
-			return 'sent';
-		});
-		if (outcome === 'none') break;
-		if (outcome === 'sent') sent++;
-		else failed++;
+		const mail = await takeDue(db);
+		if (mail === null) break;
+		try {
+			await send(mail);
+		} catch (error) {
+			await noteFailure(db, mail, error);
+			failed++;
+			continue;
+		}
+		await db
+			.update(mails)
+			.set({ sentAt: sql`now()`, lastError: null, text: '', html: '' })
+			.where(eq(mails.id, mail.id));
+		sent++;
 	}
 	return { sent, failed };
 }

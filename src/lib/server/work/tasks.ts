@@ -1,6 +1,7 @@
 import type { JobHelpers, TaskList } from 'graphile-worker';
 import { z } from 'zod';
 import { forgetOldLinks } from '../access/links';
+import { askToReset } from '../access/resetPassphrase';
 import type { Composition } from '../composition';
 import { forgetHoursBefore } from '../db/outlookCache';
 import { allBoatsOf, queuedSteps } from '../db/queue';
@@ -13,6 +14,7 @@ import { computeOutlook, weatherOnAxis } from '../outlook/compute';
 import { refreshOffsetSeconds } from './spread';
 
 const ofYard = z.object({ yardId: z.string() });
+const ofAddress = z.object({ email: z.string() });
 /** Kept hours older than this belong to runs nobody looks at any more. */
 const KEEP_HOURS_MS = 2 * 86_400_000;
 const ATTEMPTS = 4;
@@ -65,6 +67,11 @@ export function createTasks({ db, config, log, sessions, storage }: Parts): Task
 			const current = await currentForecast(db, yard, now);
 			await computeOutlook(db, yard, queue, current, weatherOnAxis(yard, current, now));
 			log.info({ yardId, steps: queue.length }, 'outlook computed');
+		},
+		/** Looks whether somebody who forgot a passphrase has an account, and writes to them. */
+		async mailReset(payload) {
+			const { email } = ofAddress.parse(payload);
+			await askToReset(db, email, config.ORIGIN);
 		},
 		/** Every minute, and when a letter is posted: sends what is due. */
 		async deliverMail() {

@@ -1,7 +1,7 @@
 import { fail } from '@sveltejs/kit';
 import { z } from 'zod';
 import { founderSchema } from '$lib/server/access/foundYard';
-import { askToReset } from '$lib/server/access/resetPassphrase';
+import { requestReset } from '$lib/server/access/resetPassphrase';
 import { parts } from '$lib/server/composition';
 import { readForm } from '$lib/server/http/form';
 import { mailPause } from '$lib/server/http/mailLimit';
@@ -11,11 +11,11 @@ const forgotForm = z.object({ email: founderSchema.shape.email });
 
 export const actions: Actions = {
 	default: async ({ request, getClientAddress }) => {
-		const { db, config } = parts();
+		const { db } = parts();
 		const read = await readForm(request, forgotForm);
 		if (read.trouble !== null) return fail(400, { ...read.trouble, message: '', sentTo: null });
 		const { email } = read.data;
-		const minutes = await mailPause(getClientAddress(), email);
+		const minutes = await mailPause(db, getClientAddress(), email);
 		if (minutes !== null)
 			return fail(429, {
 				values: read.values,
@@ -23,7 +23,7 @@ export const actions: Actions = {
 				message: `Too many letters from here. Wait ${minutes} minutes, then try again.`,
 				sentTo: null
 			});
-		await askToReset(db, email, config.ORIGIN);
+		await requestReset(db, email);
 		return { values: read.values, errors: {}, message: '', sentTo: email };
 	}
 };

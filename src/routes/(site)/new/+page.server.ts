@@ -7,7 +7,6 @@ import {
 	foundYard,
 	yardPlaceSchema
 } from '$lib/server/access/foundYard';
-import { passphraseSchema, passphraseWeakness } from '$lib/server/access/strength';
 import { parts } from '$lib/server/composition';
 import { readForm, typedCoordinate, typedNumber } from '$lib/server/http/form';
 import { mailPause } from '$lib/server/http/mailLimit';
@@ -19,11 +18,7 @@ const placeForm = z.object({
 	longitude: typedCoordinate('longitude'),
 	elevation: typedNumber(-450, 6000, 'Type metres above the sea, like 3.')
 });
-const newcomerForm = placeForm.extend({
-	name: founderSchema.shape.name,
-	email: founderSchema.shape.email,
-	passphrase: passphraseSchema
-});
+const newcomerForm = placeForm.extend({ email: founderSchema.shape.email });
 
 const placeOf = ({ yard, ...it }: z.infer<typeof placeForm>) => ({
 	...it,
@@ -48,10 +43,7 @@ export const actions: Actions = {
 		const read = await readForm(request, newcomerForm);
 		if (read.trouble !== null) return fail(400, { ...read.trouble, message: '', sentTo: null });
 		const { data, values } = read;
-		const weakness = passphraseWeakness(data.passphrase, [data.name, data.email, data.yard]);
-		if (weakness !== null)
-			return fail(400, { values, errors: { passphrase: weakness }, message: '', sentTo: null });
-		const minutes = await mailPause(getClientAddress(), data.email);
+		const minutes = await mailPause(db, getClientAddress(), data.email);
 		if (minutes !== null)
 			return fail(429, {
 				values,
@@ -61,8 +53,7 @@ export const actions: Actions = {
 			});
 		await askToFound(db, {
 			place: placeOf(data),
-			founder: { name: data.name, email: data.email },
-			passphrase: data.passphrase,
+			email: data.email,
 			origin: config.ORIGIN
 		});
 		return { values, errors: {}, message: '', sentTo: data.email };

@@ -34,9 +34,15 @@ export const actions: Actions = {
 		const weakness = passphraseWeakness(data.passphrase, [user.name, user.email]);
 		if (weakness !== null) return fail(400, { errors: { passphrase: weakness }, changed: false });
 		const given = { current: data.currentPassphrase, next: data.passphrase };
-		if (!(await changePassphrase(db, sessions, user.id, given)))
-			return fail(400, {
-				errors: { currentPassphrase: 'That is not the passphrase you have now.' },
+		const shown = await changePassphrase(db, sessions, user.id, given);
+		if (shown !== 'right')
+			return fail(shown === 'wrong' ? 400 : 429, {
+				errors: {
+					currentPassphrase:
+						shown === 'wrong'
+							? 'That is not the passphrase you have now.'
+							: `Too many tries. Wait ${shown.minutes} minutes, then try again.`
+				},
 				changed: false
 			});
 		// All devices were signed out: this one comes back under a new token.

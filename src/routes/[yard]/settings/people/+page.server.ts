@@ -45,7 +45,7 @@ export const actions: Actions = {
 		const { values } = read;
 		const no = (status: number, message: string) =>
 			fail(status, { values, errors: {}, message, sentTo: null });
-		const minutes = await mailPause(getClientAddress(), email);
+		const minutes = await mailPause(db, getClientAddress(), email);
 		if (minutes !== null)
 			return no(429, `Too many letters. Wait ${minutes} minutes, then try again.`);
 		const result = await invite(

@@ -1,0 +1,1 @@
+UPDATE "mails" SET "text" = '', "html" = '' WHERE "sent_at" IS NOT NULL;
