@@ -164,6 +164,9 @@ export const ROUTES: Readonly<Record<string, Row>> = {
 		...OF_YARD,
 		own: { manager: 'let in', painter: 'not allowed', owner: 'not allowed' }
 	},
+	'load /[yard]/boats/[boat]/files': OF_BOAT,
+	'action upload /[yard]/boats/[boat]/files': BOAT_ASKED_WRONGLY,
+	'action delete /[yard]/boats/[boat]/files': BOAT_ASKED_WRONGLY,
 	'GET /[yard]/files/[file]/[size]': OF_BOAT,
 	'GET /api/v1/yards/[slug]/boats/[boat]/files': OF_BOAT,
 	'POST /api/v1/yards/[slug]/boats/[boat]/files': BOAT_ASKED_WRONGLY,

@@ -1,34 +1,31 @@
-import { error, fail, redirect } from '@sveltejs/kit';
+import { fail, redirect } from '@sveltejs/kit';
 import { z } from 'zod';
-import { requireMembership, type Permission } from '$lib/server/access/roles';
-import { boatOf } from '$lib/server/boats/boats';
+import type { Permission } from '$lib/server/access/roles';
+import { requireBoat } from '$lib/server/boats/requireBoat';
 import { parts } from '$lib/server/composition';
+import { filesOfBoat } from '$lib/server/files/list';
 import { dropStep, jobsOfBoat, queueJob } from '$lib/server/jobs/queueJob';
 import { JOB_TEMPLATES } from '$lib/server/jobs/templates';
 import { faceWords } from '$lib/server/outlook/engineInput';
 import type { Actions, PageServerLoad } from './$types';
 
-/** The membership and the boat of an address; a boat one may not see is none. */
 async function boatAt(
 	locals: App.Locals,
 	params: { yard: string; boat: string },
 	permission: Permission
 ) {
 	const { db } = parts();
-	const membership = await requireMembership(db, locals, params.yard, permission);
-	const id = z.uuid().safeParse(params.boat);
-	const boat = id.success ? await boatOf(db, membership, id.data) : null;
-	if (boat === null) error(404, 'There is no such boat, or it is not yours to see.');
-	return { db, membership, boat };
+	return { db, ...(await requireBoat(db, locals, params.yard, params.boat, permission)) };
 }
 
 export const load: PageServerLoad = async ({ locals, params }) => {
 	if (locals.user === null) redirect(303, '/sign-in');
-	const { db, boat } = await boatAt(locals, params, 'see');
+	const { db, membership, boat } = await boatAt(locals, params, 'see');
 	const { faces, ...told } = boat;
 	return {
 		boat: { ...told, faces: faces.map(faceWords) },
 		steps: await jobsOfBoat(db, boat.id),
+		files: await filesOfBoat(db, membership, boat.id),
 		templates: JOB_TEMPLATES.map(({ code, name }) => ({ code, name }))
 	};
 };
