@@ -1,5 +1,5 @@
 import type { OutlookResponse } from '../api/outlook/response';
-import { dayAndClock } from '../time/zone';
+import { dateAndClock } from '../time/zone';
 import { counted } from './words';
 
 type Warning = OutlookResponse['warnings'][number];
@@ -16,7 +16,7 @@ export function warningSentence(
 	const named = (index: number | null): string =>
 		index === null || steps[index] === undefined ? 'the step' : steps[index];
 	const at = (instant: string | null): string =>
-		instant === null ? 'a time past the forecast' : dayAndClock(instant, timeZone);
+		instant === null ? 'a time past the forecast' : dateAndClock(instant, timeZone);
 	const step = named(warning.step);
 	switch (warning.code) {
 		case 'noStretchInWindow':

@@ -121,7 +121,6 @@ export const ROUTES: Readonly<Record<string, Row>> = {
 	},
 	'load /[yard]/boats/[boat]': OF_BOAT,
 	'action queue /[yard]/boats/[boat]': BOAT_ASKED_WRONGLY,
-	'action drop /[yard]/boats/[boat]': BOAT_ASKED_WRONGLY,
 	'load /[yard]/ground': OF_YARD,
 	'action plan /[yard]/ground': MANAGER_ASKED_WRONGLY,
 	'action add /[yard]/ground': MANAGER_ASKED_WRONGLY,

@@ -4,8 +4,8 @@ import { requireMembership, type Membership } from '../../../src/lib/server/acce
 import { addBoat, boatOf, boatsOf, type NewBoat } from '../../../src/lib/server/boats/boats';
 import { queuedSteps } from '../../../src/lib/server/db/queue';
 import { SAMPLE_SHEETS } from '../../../src/lib/engine';
-import { boats, faces, jobs, sheets, stands, steps } from '../../../src/lib/server/db/schema';
-import { dropStep, jobsOfBoat, queueJob } from '../../../src/lib/server/jobs/queueJob';
+import { boats, faces, jobs, sheets, stands } from '../../../src/lib/server/db/schema';
+import { jobsOfBoat, queueJob } from '../../../src/lib/server/jobs/queueJob';
 import { JOB_TEMPLATES } from '../../../src/lib/server/jobs/templates';
 import { layTwoYards, type TwoYards } from '../../fixtures/twoYards';
 import { createTestDatabase } from '../../setup/database';
@@ -137,19 +137,4 @@ test('a coat whose sheet the yard has not is not queued, nor anything of its job
 	await rekey('gone', 'etchPrimer');
 	expect(result).toMatchObject({ outcome: 'refused', why: expect.stringContaining(name) });
 	expect(await jobsOfBoat(database.db, id)).toEqual([]);
-});
-
-describe('dropping a step', () => {
-	test('takes it off the queue once, and only off its own boat', async () => {
-		const manager = await as('manager');
-		const id = (await addBoat(database.db, manager, { ...BOAT, name: 'Stint', stand: '' })) ?? '';
-		await queueJob(database.db, manager, id, 'varnish');
-		const [{ stepId }] = await jobsOfBoat(database.db, id);
-		expect(await dropStep(database.db, two.boatOf.get(two.own.step) ?? '', stepId)).toBe(false);
-		expect(await dropStep(database.db, id, stepId)).toBe(true);
-		expect(await dropStep(database.db, id, stepId)).toBe(false);
-		const [row] = await database.db.select().from(steps).where(eq(steps.id, stepId));
-		expect(row.state).toBe('dropped');
-		expect(await queuedSteps(database.db, eq(boats.id, id))).toHaveLength(3);
-	});
 });

@@ -27,7 +27,7 @@ test('every warning is a whole sentence without a hole in it', () => {
 
 test('it names the steps, and times in the yard’s zone', () => {
 	expect(say('noStretchInWindow')).toBe(
-		'No hour is open for coat 2 in the recoat window of coat 1, from Mon 09:00 to Wed 11:30.'
+		'No hour is open for coat 2 in the recoat window of coat 1, from Mon 4 May, 09:00 to Wed 6 May, 11:30.'
 	);
 	expect(say('fewHoursLeft')).toContain('Only 5 open hours are left for coat 2');
 	expect(say('launchSlotsShut')).toBe('The one launch slot ahead is shut for coat 2.');

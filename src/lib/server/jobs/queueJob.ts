@@ -102,19 +102,3 @@ export async function jobsOfBoat(db: Database, boatId: string) {
 		.where(eq(jobs.boatId, boatId))
 		.orderBy(jobs.position, steps.position);
 }
-
-/** Drops a queued step of a boat; false where there is none. What was done stays written. */
-export async function dropStep(db: Database, boatId: string, stepId: string): Promise<boolean> {
-	const rows = await db
-		.update(steps)
-		.set({ state: 'dropped', updatedAt: sql`now()` })
-		.where(
-			and(
-				eq(steps.id, stepId),
-				eq(steps.state, 'queued'),
-				inArray(steps.jobId, db.select({ id: jobs.id }).from(jobs).where(eq(jobs.boatId, boatId)))
-			)
-		)
-		.returning({ id: steps.id });
-	return rows.length > 0;
-}

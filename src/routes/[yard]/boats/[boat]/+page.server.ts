@@ -1,10 +1,9 @@
 import { fail, redirect } from '@sveltejs/kit';
-import { z } from 'zod';
 import type { Permission } from '$lib/server/access/roles';
 import { requireBoat } from '$lib/server/boats/requireBoat';
 import { parts } from '$lib/server/composition';
 import { filesOfBoat } from '$lib/server/files/list';
-import { dropStep, jobsOfBoat, queueJob } from '$lib/server/jobs/queueJob';
+import { jobsOfBoat, queueJob } from '$lib/server/jobs/queueJob';
 import { JOB_TEMPLATES } from '$lib/server/jobs/templates';
 import { faceWords } from '$lib/server/outlook/engineInput';
 import type { Actions, PageServerLoad } from './$types';
@@ -37,12 +36,5 @@ export const actions: Actions = {
 		const result = await queueJob(db, membership, boat.id, String(form.get('template') ?? ''));
 		if (result.outcome === 'refused') return fail(400, { message: result.why });
 		redirect(303, `/${params.yard}/boats/${boat.id}`);
-	},
-	drop: async ({ locals, params, request }) => {
-		const { db, boat } = await boatAt(locals, params, 'queueWork');
-		const id = z.uuid().safeParse((await request.formData()).get('step'));
-		if (!id.success || !(await dropStep(db, boat.id, id.data)))
-			return fail(400, { message: 'That step is not queued on this boat any more.' });
-		return { message: '' };
 	}
 };
