@@ -93,6 +93,13 @@ const MANAGER_ASKED_WRONGLY: Row = {
 	own: { manager: 'asked wrongly', painter: 'not allowed', owner: 'not allowed' }
 };
 
+/** For who changes boats: managers any, owners their own. */
+const CHANGE_BOAT_ASKED_WRONGLY: Row = {
+	...OF_BOAT,
+	own: { manager: 'asked wrongly', painter: 'not allowed', owner: 'asked wrongly' },
+	otherBoat: { manager: 'asked wrongly', painter: 'not found', owner: 'not found' }
+};
+
 /** By what the walk calls them: method, `load` or `action <name>`, then the route. */
 export const ROUTES: Readonly<Record<string, Row>> = {
 	'load /(site)/sign-in': { ...OPEN, own: everyRole('moved on') },
@@ -121,6 +128,16 @@ export const ROUTES: Readonly<Record<string, Row>> = {
 	},
 	'load /[yard]/boats/[boat]': OF_BOAT,
 	'action queue /[yard]/boats/[boat]': BOAT_ASKED_WRONGLY,
+	'load /[yard]/boats/[boat]/edit': {
+		...OF_BOAT,
+		own: { manager: 'let in', painter: 'not allowed', owner: 'let in' },
+		otherBoat: { manager: 'let in', painter: 'not found', owner: 'not found' }
+	},
+	'action boat /[yard]/boats/[boat]/edit': CHANGE_BOAT_ASKED_WRONGLY,
+	'action painters /[yard]/boats/[boat]/edit': CHANGE_BOAT_ASKED_WRONGLY,
+	'action addFace /[yard]/boats/[boat]/edit': CHANGE_BOAT_ASKED_WRONGLY,
+	'action face /[yard]/boats/[boat]/edit': CHANGE_BOAT_ASKED_WRONGLY,
+	'action remove /[yard]/boats/[boat]/edit': CHANGE_BOAT_ASKED_WRONGLY,
 	'load /[yard]/ground': OF_YARD,
 	'action plan /[yard]/ground': MANAGER_ASKED_WRONGLY,
 	'action add /[yard]/ground': MANAGER_ASKED_WRONGLY,
@@ -167,6 +184,19 @@ export const ROUTES: Readonly<Record<string, Row>> = {
 	'action upload /[yard]/boats/[boat]/files': BOAT_ASKED_WRONGLY,
 	'action delete /[yard]/boats/[boat]/files': BOAT_ASKED_WRONGLY,
 	'GET /[yard]/files/[file]/[size]': OF_BOAT,
+	'GET /api/v1/yards/[slug]': OF_YARD,
+	'PATCH /api/v1/yards/[slug]': MANAGER_ASKED_WRONGLY,
+	'GET /api/v1/yards/[slug]/stands': OF_YARD,
+	'POST /api/v1/yards/[slug]/stands': MANAGER_ASKED_WRONGLY,
+	'PATCH /api/v1/yards/[slug]/stands/[stand]': MANAGER_ASKED_WRONGLY,
+	'DELETE /api/v1/yards/[slug]/stands/[stand]': MANAGER_ASKED_WRONGLY,
+	'GET /api/v1/yards/[slug]/boats/[boat]': OF_BOAT,
+	'PATCH /api/v1/yards/[slug]/boats/[boat]': CHANGE_BOAT_ASKED_WRONGLY,
+	'DELETE /api/v1/yards/[slug]/boats/[boat]': CHANGE_BOAT_ASKED_WRONGLY,
+	'POST /api/v1/yards/[slug]/boats/[boat]/faces': CHANGE_BOAT_ASKED_WRONGLY,
+	'PATCH /api/v1/yards/[slug]/boats/[boat]/faces/[face]': CHANGE_BOAT_ASKED_WRONGLY,
+	'DELETE /api/v1/yards/[slug]/boats/[boat]/faces/[face]': CHANGE_BOAT_ASKED_WRONGLY,
+	'GET /api/v1/yards/[slug]/boats/[boat]/stays': OF_BOAT,
 	'GET /api/v1/yards/[slug]/boats/[boat]/files': OF_BOAT,
 	'POST /api/v1/yards/[slug]/boats/[boat]/files': BOAT_ASKED_WRONGLY,
 	'GET /api/v1/yards/[slug]/boats/[boat]/files/[file]': OF_BOAT,

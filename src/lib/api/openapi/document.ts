@@ -4,10 +4,18 @@ import { hoursPart } from './hours';
 import { installationPart } from './installation';
 import { outlookPart } from './outlook';
 import { schemaOf, type Json, type Part } from './parts';
+import { yardPart } from './yard';
 import { problemSchema } from '../problem';
 
 /** One file for each subject; what a subject gains is described there. */
-const PARTS: readonly Part[] = [outlookPart, hoursPart, forecastPart, filesPart, installationPart];
+const PARTS: readonly Part[] = [
+	outlookPart,
+	hoursPart,
+	forecastPart,
+	yardPart,
+	filesPart,
+	installationPart
+];
 
 /** Every route of `/api/v1`, described. Schemas are those the routes parse and answer with. */
 export function openApiDocument(): Json {

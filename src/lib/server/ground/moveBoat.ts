@@ -17,10 +17,25 @@ export function boatsOnGround(db: Database, membership: Membership) {
 		.orderBy(asc(stands.position), asc(boats.name));
 }
 
-/**
- * Puts a boat on a stand, or on none, and turns it there; its stay before is kept. A stand holds
- * one boat: one that is taken says by which.
- */
+/** Why a boat cannot be put on a stand: it is none of the yard, or another stands there; null where it can. */
+export async function standTrouble(
+	db: Database,
+	membership: Membership,
+	boatId: string,
+	standId: string
+): Promise<string | null> {
+	const stand = await standOf(db, membership, standId);
+	if (stand === null) return 'That stand is none of this yard any more.';
+	const [other] = await db
+		.select({ name: boats.name })
+		.from(boats)
+		.where(and(eq(boats.standId, standId), ne(boats.id, boatId)));
+	return other === undefined
+		? null
+		: `${other.name} stands on ${stand.name}: move that boat first.`;
+}
+
+/** Puts a boat on a stand, or on none, and turns it there; its stay before is kept. */
 export async function moveBoat(
 	db: Database,
 	membership: Membership,
@@ -33,18 +48,8 @@ export async function moveBoat(
 		.where(and(eq(boats.id, boatId), visibleBoats(db, membership)));
 	if (boat === undefined) return { outcome: 'gone' };
 	if (standId !== null && standId !== boat.standId) {
-		const stand = await standOf(db, membership, standId);
-		if (stand === null)
-			return { outcome: 'refused', why: 'That stand is none of this yard any more.' };
-		const [other] = await db
-			.select({ name: boats.name })
-			.from(boats)
-			.where(and(eq(boats.standId, standId), ne(boats.id, boatId)));
-		if (other !== undefined)
-			return {
-				outcome: 'refused',
-				why: `${other.name} stands on ${stand.name}: move that boat first.`
-			};
+		const why = await standTrouble(db, membership, boatId, standId);
+		if (why !== null) return { outcome: 'refused', why };
 	}
 	return changeRow(db, boats, boatId, revision, { standId, heading: heading % 360 });
 }

@@ -1,6 +1,7 @@
 import { fail, redirect } from '@sveltejs/kit';
-import type { Permission } from '$lib/server/access/roles';
+import { mayDo, type Permission } from '$lib/server/access/roles';
 import { requireBoat } from '$lib/server/boats/requireBoat';
+import { staysOf } from '$lib/server/boats/stays';
 import { parts } from '$lib/server/composition';
 import { filesOfBoat } from '$lib/server/files/list';
 import { jobsOfBoat, queueJob } from '$lib/server/jobs/queueJob';
@@ -23,6 +24,8 @@ export const load: PageServerLoad = async ({ locals, params }) => {
 	const { faces, ...told } = boat;
 	return {
 		boat: { ...told, faces: faces.map(faceWords) },
+		stays: await staysOf(db, boat.id),
+		mayChange: mayDo(membership.role, 'changeBoat'),
 		steps: await jobsOfBoat(db, boat.id),
 		files: await filesOfBoat(db, membership, boat.id),
 		templates: JOB_TEMPLATES.map(({ code, name }) => ({ code, name }))
