@@ -19,10 +19,23 @@ export interface FacePhases {
 	readonly clocks: readonly { readonly clock: CureClock; readonly ends: Int32Array }[];
 }
 
-/** Ends of the empty window after each slot: nothing to wait for. */
+const emptyWindows = new Map<number, Int32Array>();
+
+/** Ends of the empty window after each slot: nothing to wait for. Shared, not to be written. */
 function nextSlots(count: number): Int32Array {
-	const ends = new Int32Array(count);
-	for (let i = 0; i < count; i++) ends[i] = i + 1;
+	const made = emptyWindows.get(count) ?? Int32Array.from({ length: count }, (_, i) => i + 1);
+	// Grids of one process are of few lengths; keep the last.
+	if (!emptyWindows.has(count)) emptyWindows.clear();
+	emptyWindows.set(count, made);
+	return made;
+}
+
+const endsOfClock = new WeakMap<CureClock, Int32Array>();
+
+/** Where a clock begun at the end of each slot is done, once per clock. */
+function finishesOf(clock: CureClock): Int32Array {
+	const ends = endsOfClock.get(clock) ?? finishSlots(clock.progress).subarray(1);
+	endsOfClock.set(clock, ends);
 	return ends;
 }
 
@@ -50,13 +63,14 @@ export function facePhases(
 		if (known !== undefined) return known.ends;
 		// Earliest clocks run on the coldest spot.
 		const clock = cureClock(table, face.surfaceShaded, 'earliest', step.limits.curing?.min);
-		const ends = finishSlots(clock.progress).subarray(1);
+		const ends = finishesOf(clock);
 		clocks.set(name, { clock, ends });
 		return ends;
 	};
 	const phases = phasesOf(step, face, faceIndex, errors).map((phase) => ({
 		...phase,
-		ends: phase.until.map(endsOf).reduce(later, none)
+		// No window ends before the slot after.
+		ends: phase.until.length === 0 ? none : phase.until.map(endsOf).reduce(later)
 	}));
 	const [wet, , set] = phases;
 	return {

@@ -1,4 +1,4 @@
-import { cureClock, progressAt } from '../../coating/cure';
+import { cureClock, progressAt, type CureClock } from '../../coating/cure';
 import type { ClockSide } from '../../coating/curve';
 import { asksNoWait, type TimeTable } from '../../coating/times';
 import type { FaceConditions } from '../weather/slots';
@@ -14,11 +14,27 @@ interface FaceClock {
 	readonly progress: Float64Array;
 	/** First slot of unknown temperature from each slot on; null where there is none. */
 	readonly nextUnknown: Int32Array | null;
-	/** Progress a slot before the grid: none for earliest clocks, the first day's most for latest ones. */
-	readonly before: number;
-	/** Progress from the forecast's end over the mean day of its last three, slot by slot; null without them. */
-	readonly cycle: Float64Array | null;
 	readonly side: ClockSide;
+	/** Worked out where first asked for. */
+	before: number | undefined;
+	cycle: Float64Array | null | undefined;
+}
+
+/** Progress a slot before the grid: none for earliest clocks, the first day's most for latest ones. */
+function beforeGrid(clock: FaceClock): number {
+	if (clock.before !== undefined) return clock.before;
+	const { progress, side } = clock;
+	let most = 0;
+	if (side === 'latest')
+		for (let i = 0; i < Math.min(DAY, progress.length - 1); i++)
+			most = Math.max(most, progress[i + 1] - progress[i]);
+	return (clock.before = most);
+}
+
+/** Progress from the forecast's end over the mean day of its last three, slot by slot; null without them. */
+function pastEnd(clock: FaceClock): Float64Array | null {
+	if (clock.cycle === undefined) clock.cycle = meanCycle(clock.progress, clock.nextUnknown);
+	return clock.cycle;
 }
 
 /** Progress within the mean cycle of the last days before a slot, beginning at that slot. */
@@ -37,7 +53,9 @@ function meanCycle(progress: Float64Array, unknown: Int32Array | null): Float64A
 	return cycle;
 }
 
-/** The clock of a table on a face's temperature. */
+const remembered = new WeakMap<CureClock, FaceClock>();
+
+/** The clock of a table on a face's temperature; a temperature belongs to one face and its weather. */
 function faceClock(
 	table: Exclude<TimeTable, null>,
 	face: FaceConditions,
@@ -45,8 +63,10 @@ function faceClock(
 	side: ClockSide,
 	curingMin: number
 ): FaceClock {
-	const end = Math.min(face.weather.knownTo, temperature.length);
 	const clock = cureClock(table, temperature, side, curingMin);
+	const known = remembered.get(clock);
+	if (known !== undefined) return known;
+	const end = Math.min(face.weather.knownTo, temperature.length);
 	const progress = clock.progress.subarray(0, end + 1);
 	const unknown = clock.unknown !== null && clock.unknown[end] > 0 ? clock.unknown : null;
 	let nextUnknown: Int32Array | null = null;
@@ -55,18 +75,18 @@ function faceClock(
 		for (let i = end - 1; i >= 0; i--)
 			nextUnknown[i] = unknown[i + 1] > unknown[i] ? i : nextUnknown[i + 1];
 	}
-	let before = 0;
-	if (side === 'latest')
-		for (let i = 0; i < Math.min(DAY, end); i++)
-			before = Math.max(before, progress[i + 1] - progress[i]);
-	return { progress, nextUnknown, before, cycle: meanCycle(progress, nextUnknown), side };
+	const made: FaceClock = { progress, nextUnknown, side, before: undefined, cycle: undefined };
+	remembered.set(clock, made);
+	return made;
 }
 
 /** Rounding of a sum of many slots. */
 const ROUNDING = 1e-9;
 
 /** Progress past the forecast's end at a position. */
-function progressPast({ progress, cycle }: FaceClock, position: number): number {
+function progressPast(clock: FaceClock, position: number): number {
+	const { progress } = clock;
+	const cycle = pastEnd(clock);
 	const end = progress.length - 1;
 	if (cycle === null) return progress[end];
 	const past = position - end;
@@ -75,7 +95,9 @@ function progressPast({ progress, cycle }: FaceClock, position: number): number 
 }
 
 /** Position past the forecast's end at which a progress is made; +Infinity where it never is. */
-function positionPast({ progress, cycle }: FaceClock, target: number): number {
+function positionPast(clock: FaceClock, target: number): number {
+	const { progress } = clock;
+	const cycle = pastEnd(clock);
 	const end = progress.length - 1;
 	if (cycle === null || !(cycle[DAY] > 0)) return Infinity;
 	const rest = target - progress[end];
@@ -90,21 +112,22 @@ function positionPast({ progress, cycle }: FaceClock, target: number): number {
 
 /** Where clocks started at rising positions are done. */
 function doneOn(clock: FaceClock, positions: Float64Array, isCarriedOn: boolean): Float64Array {
-	const { progress, nextUnknown, before, side } = clock;
+	const { progress, nextUnknown, side } = clock;
 	const end = progress.length - 1;
 	const done = new Float64Array(positions.length);
 	let slot = 0;
-	positions.forEach((position, k) => {
+	for (let k = 0; k < positions.length; k++) {
+		const position = positions[k];
 		const started =
 			position < 0
-				? position * before
+				? position * beforeGrid(clock)
 				: position <= end
 					? progressAt(progress, position)
 					: progressPast(clock, position);
 		const target = started + 1;
 		if (target <= 0) {
-			done[k] = position + 1 / before;
-			return;
+			done[k] = position + 1 / beforeGrid(clock);
+			continue;
 		}
 		slot = Math.max(slot, Math.min(end, Math.max(0, Math.floor(position))));
 		while (slot < end && progress[slot + 1] < target - ROUNDING) slot++;
@@ -117,7 +140,7 @@ function doneOn(clock: FaceClock, positions: Float64Array, isCarriedOn: boolean)
 			const part = rate > 0 ? Math.min(1, (target - progress[slot]) / rate) : 1;
 			done[k] = Math.max(position, slot + part);
 		} else done[k] = isCarriedOn ? positionPast(clock, target) : Infinity;
-	});
+	}
 	return done;
 }
 
@@ -150,9 +173,9 @@ export function reachedAt(question: ClockQuestion, positions: Float64Array): Flo
 	for (const face of sides) {
 		const temperature = run === 'shaded' ? face.surfaceShaded : face.surfaceSunlit;
 		const clock = faceClock(table, face, temperature, side, isEarliest ? curingMin : -Infinity);
-		doneOn(clock, positions, isCarriedOn).forEach((done, k) => {
-			worst[k] = isEarliest ? Math.max(worst[k], done) : Math.min(worst[k], done);
-		});
+		const done = doneOn(clock, positions, isCarriedOn);
+		for (let k = 0; k < done.length; k++)
+			worst[k] = isEarliest ? Math.max(worst[k], done[k]) : Math.min(worst[k], done[k]);
 	}
 	// Sums of many slots may fall back by a rounding; what is later is never through sooner.
 	for (let k = 1; k < worst.length; k++)

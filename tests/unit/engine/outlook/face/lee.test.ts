@@ -155,7 +155,7 @@ describe('whatever the lee', () => {
 					});
 				}
 			),
-			{ numRuns: 100 }
+			{ numRuns: 40 }
 		);
 	});
 
