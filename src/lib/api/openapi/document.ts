@@ -1,6 +1,7 @@
 import { filesPart } from './files';
 import { forecastPart } from './forecast';
 import { hoursPart } from './hours';
+import { jobsPart } from './jobs';
 import { installationPart } from './installation';
 import { outlookPart } from './outlook';
 import { schemaOf, type Json, type Part } from './parts';
@@ -13,6 +14,7 @@ const PARTS: readonly Part[] = [
 	hoursPart,
 	forecastPart,
 	yardPart,
+	jobsPart,
 	filesPart,
 	installationPart
 ];
