@@ -1,7 +1,8 @@
 import { eq } from 'drizzle-orm';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { requireMembership, type Membership } from '../../../src/lib/server/access/roles';
-import { addBoat, boatOf, boatsOf, type NewBoat } from '../../../src/lib/server/boats/boats';
+import { addBoat, boatOf, type NewBoat } from '../../../src/lib/server/boats/boats';
+import { boatList } from '../../../src/lib/server/lists/boats';
 import { queuedSteps } from '../../../src/lib/server/db/queue';
 import { SAMPLE_SHEETS } from '../../../src/lib/engine';
 import { boats, faces, jobs, sheets, stands } from '../../../src/lib/server/db/schema';
@@ -64,7 +65,9 @@ describe('adding a boat', () => {
 
 	test('an owner’s list has their own, a painter’s those assigned, a manager’s all', async () => {
 		const names = async (role: 'manager' | 'painter' | 'owner') =>
-			(await boatsOf(database.db, await as(role))).map(({ name }) => name);
+			(await boatList.page(database.db, await as(role), { limit: 200 })).items.map(
+				({ name }) => name
+			);
 		const [all, mine, theirs] = [
 			await names('manager'),
 			await names('owner'),

@@ -13,6 +13,7 @@ export function placesOf(yard: string, pathname: string): Place[] {
 	const places = [
 		{ word: 'Hours', href: hours },
 		{ word: 'Boats', href: resolve('/[yard]/boats', { yard }) },
+		{ word: 'Jobs', href: resolve('/[yard]/jobs', { yard }) },
 		{ word: 'Ground', href: resolve('/[yard]/ground', { yard }) },
 		{ word: 'Settings', href: resolve('/[yard]/settings', { yard }) }
 	];

@@ -1,8 +1,8 @@
-import { and, asc, count, eq, max } from 'drizzle-orm';
+import { and, asc, eq, max } from 'drizzle-orm';
 import { z } from 'zod';
 import { visibleBoats, type Membership } from '../access/roles';
 import type { Database } from '../db/client';
-import { boats, faces, jobs, memberships, stands, steps, users } from '../db/schema';
+import { boats, faces, memberships, stands, users, type Role } from '../db/schema';
 import { COLOURS, HULLS, usualFaces, type Colour } from './hulls';
 
 /** Boats of a yard: those a person may see, and adding one. */
@@ -22,27 +22,6 @@ export const newBoatSchema = z.object({
 });
 export type NewBoat = z.infer<typeof newBoatSchema>;
 
-/** The boats a member may see, by stand and name, with the steps queued on each. */
-export function boatsOf(db: Database, membership: Membership) {
-	return db
-		.select({
-			id: boats.id,
-			name: boats.name,
-			stand: stands.name,
-			owner: users.name,
-			launchBy: boats.launchBy,
-			queued: count(steps.id)
-		})
-		.from(boats)
-		.leftJoin(stands, eq(stands.id, boats.standId))
-		.leftJoin(users, eq(users.id, boats.ownerId))
-		.leftJoin(jobs, eq(jobs.boatId, boats.id))
-		.leftJoin(steps, and(eq(steps.jobId, jobs.id), eq(steps.state, 'queued')))
-		.where(visibleBoats(db, membership))
-		.groupBy(boats.id, stands.id, users.id)
-		.orderBy(asc(stands.position), asc(boats.name));
-}
-
 /** One boat with its faces, where a member may see it; null otherwise. */
 export async function boatOf(db: Database, membership: Membership, id: string) {
 	const [boat] = await db
@@ -59,15 +38,18 @@ export async function boatOf(db: Database, membership: Membership, id: string) {
 	return { ...boat, faces: ofBoat };
 }
 
-/** The owners of a yard, for a choice among them. */
-export function ownersOf(db: Database, { yard }: Membership) {
+/** The people of a yard in a role, for a choice among them. */
+export function peopleIn(db: Database, { yard }: Membership, role: Role) {
 	return db
 		.select({ id: users.id, name: users.name })
 		.from(memberships)
 		.innerJoin(users, eq(users.id, memberships.userId))
-		.where(and(eq(memberships.yardId, yard.id), eq(memberships.role, 'owner')))
+		.where(and(eq(memberships.yardId, yard.id), eq(memberships.role, role)))
 		.orderBy(asc(users.name));
 }
+
+/** The owners of a yard, for a choice among them. */
+export const ownersOf = (db: Database, membership: Membership) => peopleIn(db, membership, 'owner');
 
 /**
  * Adds a boat with the usual faces of its build. An owner's new boat is their own, whoever is

@@ -17,15 +17,10 @@ export function readListQuery<Schema extends z.ZodObject>(url: URL, schema: Sche
 	return parsed.data;
 }
 
-/** The same for a page of ours, which tells a problem as a page. */
-export function readPageQuery<Schema extends z.ZodObject>(url: URL, schema: Schema) {
-	return asPage(() => readListQuery(url, schema));
-}
-
-/** Runs what tells its problems to programs for a page. */
-export function asPage<Result>(work: () => Result): Result {
+/** Runs what tells its problems to programs for a page of ours. */
+export async function asPage<Result>(work: () => Promise<Result>): Promise<Result> {
 	try {
-		return work();
+		return await work();
 	} catch (thrown) {
 		if (thrown instanceof ApiProblem) error(thrown.status, thrown.message);
 		throw thrown;

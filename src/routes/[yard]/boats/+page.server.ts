@@ -1,10 +1,13 @@
 import { fail, redirect } from '@sveltejs/kit';
 import { z } from 'zod';
 import { mayDo, requireMembership } from '$lib/server/access/roles';
-import { addBoat, boatsOf, newBoatSchema, ownersOf } from '$lib/server/boats/boats';
+import { boatsQuerySchema } from '$lib/api/lists/boats';
+import { addBoat, newBoatSchema, ownersOf } from '$lib/server/boats/boats';
 import { COLOURS, HULLS } from '$lib/server/boats/hulls';
 import { parts } from '$lib/server/composition';
 import { readForm, typedNumber } from '$lib/server/http/form';
+import { asPage, readListQuery } from '$lib/server/http/list';
+import { boatList } from '$lib/server/lists/boats';
 import type { Actions, PageServerLoad } from './$types';
 
 const { name, stand, hull, colour } = newBoatSchema.shape;
@@ -17,13 +20,17 @@ const boatForm = z.object({
 	owner: z.string()
 });
 
-export const load: PageServerLoad = async ({ locals, params }) => {
+export const load: PageServerLoad = async ({ locals, params, url }) => {
 	if (locals.user === null) redirect(303, '/sign-in');
 	const { db } = parts();
 	const membership = await requireMembership(db, locals, params.yard);
+	const page = await asPage(async () =>
+		boatList.page(db, membership, readListQuery(url, boatsQuerySchema))
+	);
 	const isManager = membership.role === 'manager';
 	return {
-		boats: await boatsOf(db, membership),
+		boats: page.items,
+		next: page.next,
 		mayAdd: mayDo(membership.role, 'addBoat'),
 		owners: isManager ? await ownersOf(db, membership) : null,
 		hulls: [...HULLS],

@@ -34,8 +34,10 @@ export const boats = pgTable(
 		revision: revision()
 	},
 	(table) => [
-		index().on(table.yardId),
+		index().on(table.yardId, table.name, table.id),
 		index().on(table.ownerId),
+		index().on(table.standId),
+		index('boats_trigrams').using('gin', table.yardId, table.name.op('gin_trgm_ops')),
 		wallOfYard(table.yardId, 'accounts')
 	]
 );

@@ -28,7 +28,11 @@ export const changes = pgTable(
 		after: jsonb().$type<Record<string, unknown>>()
 	},
 	(table) => [
-		index().on(table.yardId, table.id),
+		// The record is read from the newest on: all of it, of a person, of a boat, of a kind of row.
+		index().on(table.yardId, table.at, table.id),
+		index().on(table.yardId, table.personId, table.at, table.id),
+		index().on(table.yardId, table.boatId, table.at, table.id),
+		index('changes_of_subject').on(table.yardId, table.subject, table.at, table.id),
 		index().on(table.yardId, table.subject, table.rowId, table.id),
 		wallOfRecord(table.yardId)
 	]

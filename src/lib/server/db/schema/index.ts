@@ -1,5 +1,6 @@
 export * from './accounts';
 export * from './people';
+export * from './tokens';
 export * from './yard';
 export * from './boats';
 export * from './sheets';

@@ -37,7 +37,11 @@ export const jobs = pgTable(
 		position: integer().notNull(),
 		revision: revision()
 	},
-	(table) => [index().on(table.boatId), wallOfYard(table.yardId)]
+	(table) => [
+		index().on(table.boatId),
+		index('jobs_trigrams').using('gin', table.yardId, table.name.op('gin_trgm_ops')),
+		wallOfYard(table.yardId)
+	]
 );
 
 /**
@@ -72,7 +76,14 @@ export const steps = pgTable(
 		updatedAt: timestamp({ withTimezone: true }).notNull().defaultNow(),
 		revision: revision()
 	},
-	(table) => [index().on(table.jobId, table.position), wallOfYard(table.yardId)]
+	(table) => [
+		index().on(table.jobId, table.position),
+		// Lists, what changed last first: all, by state, by kind.
+		index().on(table.yardId, table.updatedAt, table.id),
+		index().on(table.yardId, table.state, table.updatedAt, table.id),
+		index().on(table.yardId, table.kind, table.updatedAt, table.id),
+		wallOfYard(table.yardId)
+	]
 );
 export type StepRow = typeof steps.$inferSelect;
 

@@ -1,5 +1,5 @@
 import { sql } from 'drizzle-orm';
-import { integer, pgTable, text, timestamp, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
+import { index, integer, pgTable, text, timestamp, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
 import { wallOfAccounts, wallOfPeople, wallOfPerson } from './walls';
 
 /** A person who can sign in. */
@@ -21,6 +21,7 @@ export const users = pgTable(
 	},
 	(table) => [
 		uniqueIndex('users_email_lower').on(sql`lower(${table.email})`),
+		index('users_trigrams').using('gin', table.name.op('gin_trgm_ops')),
 		wallOfPeople(table.id)
 	]
 );

@@ -11,6 +11,7 @@ import {
 	unique,
 	uuid
 } from 'drizzle-orm/pg-core';
+import { ROLES, type Role } from '../../../api/roles';
 import type { Hoist } from '../../../api/yard/hoists';
 import type { Holiday } from '../../../api/yard/holidays';
 import { PROVIDER_NAMES, SLIP_UNITS } from '../../../api/yard/settings';
@@ -65,8 +66,7 @@ export const yards = pgTable(
 );
 export type Yard = typeof yards.$inferSelect;
 
-export const ROLES = ['manager', 'painter', 'owner'] as const;
-export type Role = (typeof ROLES)[number];
+export { ROLES, type Role };
 
 export const memberships = pgTable(
 	'memberships',
@@ -104,6 +104,10 @@ export const stands = pgTable(
 		lee: jsonb().$type<LeeSector[]>().notNull().default([]),
 		revision: revision()
 	},
-	(table) => [unique().on(table.yardId, table.name), wallOfYard(table.yardId)]
+	(table) => [
+		unique().on(table.yardId, table.name),
+		index().on(table.yardId, table.position, table.id),
+		wallOfYard(table.yardId)
+	]
 );
 export type StandRow = typeof stands.$inferSelect;

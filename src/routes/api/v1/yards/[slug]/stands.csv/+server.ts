@@ -1,0 +1,4 @@
+import { standList } from '$lib/server/lists/stands';
+import { csvRoute } from '$lib/server/lists/list';
+
+export const GET = csvRoute(standList);
