@@ -1,4 +1,5 @@
 import type { Session, SignedInUser } from '$lib/server/access/sessions';
+import type { UsedToken } from '$lib/server/access/tokens';
 
 declare global {
 	namespace App {
@@ -16,6 +17,8 @@ declare global {
 			requestId: string;
 			user: SignedInUser | null;
 			session: Session | null;
+			/** What the request signed in with instead of a cookie; null: it did not. */
+			token: UsedToken | null;
 		}
 	}
 }

@@ -116,6 +116,8 @@ export const ROUTES: Readonly<Record<string, Row>> = {
 	'action join /(site)/invitation/[token]': LINK_OVER,
 	'load /(site)/you': OWN_ACCOUNT,
 	'action passphrase /(site)/you': { ...OWN_ACCOUNT, own: everyRole('asked wrongly') },
+	'action makeToken /(site)/you': { ...OWN_ACCOUNT, own: everyRole('asked wrongly') },
+	'action withdrawToken /(site)/you': { ...OWN_ACCOUNT, own: everyRole('moved on') },
 	'action endDevice /(site)/you': { ...OWN_ACCOUNT, own: everyRole('moved on') },
 	// Leads to sign-in whoever asks: there is nothing to refuse.
 	'POST /(site)/sign-out': { ...OPEN, signedOut: 'sign in', own: everyRole('sign in') },
@@ -171,23 +173,6 @@ export const ROUTES: Readonly<Record<string, Row>> = {
 	'action answer /[yard]/jobs/[job]': BOAT_ASKED_WRONGLY,
 	'load /[yard]/jobs/[job]/steps/[step]': OF_BOAT,
 	'action default /[yard]/jobs/[job]/steps/[step]': BOAT_ASKED_WRONGLY,
-	'GET /api/v1/yards/[slug]/boats/[boat]/jobs': OF_BOAT,
-	'POST /api/v1/yards/[slug]/boats/[boat]/jobs': BOAT_ASKED_WRONGLY,
-	'PUT /api/v1/yards/[slug]/boats/[boat]/jobs': BOAT_ASKED_WRONGLY,
-	'GET /api/v1/yards/[slug]/jobs/[job]': OF_BOAT,
-	'PATCH /api/v1/yards/[slug]/jobs/[job]': BOAT_ASKED_WRONGLY,
-	'PUT /api/v1/yards/[slug]/jobs/[job]/order': BOAT_ASKED_WRONGLY,
-	'POST /api/v1/yards/[slug]/jobs/[job]/steps': BOAT_ASKED_WRONGLY,
-	'PUT /api/v1/yards/[slug]/steps/[step]': BOAT_ASKED_WRONGLY,
-	'PUT /api/v1/yards/[slug]/steps/[step]/state': BOAT_ASKED_WRONGLY,
-	'GET /api/v1/yards/[slug]/jobs/[job]/plans': OF_BOAT,
-	'POST /api/v1/yards/[slug]/jobs/[job]/plans': OF_WHO_PLANS_ASKED_WRONGLY,
-	'DELETE /api/v1/yards/[slug]/jobs/[job]/plans': {
-		...OF_WHO_PLANS,
-		own: { manager: 'not found', painter: 'not allowed', owner: 'not found' },
-		otherBoat: { manager: 'not found', painter: 'not found', owner: 'not found' }
-	},
-	'PUT /api/v1/yards/[slug]/jobs/[job]/plan/answer': BOAT_ASKED_WRONGLY,
 	'load /[yard]/settings/people': OF_WHO_ASKS,
 	'action invite /[yard]/settings/people': {
 		...OF_WHO_ASKS,
@@ -222,6 +207,15 @@ export const ROUTES: Readonly<Record<string, Row>> = {
 		...OF_BOAT,
 		own: { manager: 'let in', painter: 'not allowed', owner: 'not allowed' }
 	},
+	'GET /api/v1/yards/[slug]/boats': OF_YARD,
+	'GET /api/v1/yards/[slug]/boats.csv': OF_YARD,
+	'GET /api/v1/yards/[slug]/steps': OF_YARD,
+	'GET /api/v1/yards/[slug]/steps.csv': OF_YARD,
+	'GET /api/v1/yards/[slug]/people': OF_MANAGER,
+	'GET /api/v1/yards/[slug]/people.csv': OF_MANAGER,
+	'GET /api/v1/yards/[slug]/stands': OF_YARD,
+	'GET /api/v1/yards/[slug]/stands.csv': OF_YARD,
+	'load /[yard]/jobs': OF_YARD,
 	'GET /api/v1/health': OPEN,
 
 	'GET /api/v1/openapi.json': OPEN,

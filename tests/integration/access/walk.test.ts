@@ -4,6 +4,7 @@ import { join } from 'node:path';
 import { afterAll, beforeAll, beforeEach, describe, expect, test } from 'vitest';
 import { startForecastFake, type ForecastFake } from '../../../fakes/forecast/server';
 import { composeWeb, parts } from '../../../src/lib/server/composition';
+import { ROUTE_SCOPES } from '../../../src/lib/server/access/scopes';
 import { ROLES } from '../../../src/lib/server/db/schema';
 import { layFileOfEach } from '../../fixtures/boatFiles';
 import { layTwoYards, type TwoYards } from '../../fixtures/twoYards';
@@ -70,6 +71,11 @@ const at = (slug: string, step: string) => ({
 test('every load, action and method is in the table, and the table holds no other', () => {
 	expect(DOORS.map(({ name }) => name).sort()).toEqual(Object.keys(ROUTES).sort());
 	expect(staticPages().sort()).toEqual([...STATIC_PAGES].sort());
+});
+
+test('every method of the API says what a token must hold there', () => {
+	const methods = DOORS.map(({ name }) => name).filter((name) => / \/api\//.test(name));
+	expect(Object.keys(ROUTE_SCOPES).sort()).toEqual(methods.sort());
 });
 
 test('a row says something of another yard where its address names one, and of a boat likewise', () => {

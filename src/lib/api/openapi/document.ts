@@ -1,12 +1,13 @@
 import { filesPart } from './files';
 import { forecastPart } from './forecast';
 import { hoursPart } from './hours';
-import { jobsPart } from './jobs';
 import { installationPart } from './installation';
+import { listsPart } from './lists';
 import { outlookPart } from './outlook';
 import { schemaOf, type Json, type Part } from './parts';
 import { yardPart } from './yard';
 import { problemSchema } from '../problem';
+import { SCOPES } from '../tokens';
 
 /** One file for each subject; what a subject gains is described there. */
 const PARTS: readonly Part[] = [
@@ -14,8 +15,8 @@ const PARTS: readonly Part[] = [
 	hoursPart,
 	forecastPart,
 	yardPart,
-	jobsPart,
 	filesPart,
+	listsPart,
 	installationPart
 ];
 
@@ -33,7 +34,13 @@ export function openApiDocument(): Json {
 		paths: Object.assign({}, ...PARTS.map(({ paths }) => paths)) as Json,
 		components: {
 			securitySchemes: {
-				session: { type: 'apiKey', in: 'cookie', name: 'yardglass-session' }
+				session: { type: 'apiKey', in: 'cookie', name: 'yardglass-session' },
+				token: {
+					type: 'http',
+					scheme: 'bearer',
+					bearerFormat: 'yg_…',
+					description: `A personal access token, made on the page about you. It holds some of: ${SCOPES.join(', ')}.`
+				}
 			},
 			schemas: {
 				...(Object.assign({}, ...PARTS.map(({ schemas }) => schemas)) as Json),

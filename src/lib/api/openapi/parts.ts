@@ -70,7 +70,8 @@ export const optional = (name: string, description: string, schema: Json): Json 
 export const UUID = { type: 'string', format: 'uuid' };
 export const BOAT = parameter('boat', 'path', 'The boat', UUID);
 export const SLUG = parameter('slug', 'path', 'The yard, as in its address', { type: 'string' });
-export const SIGNED_IN = [{ session: [] }];
+/** Signed in by cookie, or with a token that holds what `lib/server/access/scopes.ts` asks of it. */
+export const SIGNED_IN = [{ session: [] }, { token: [] }];
 
 /** What every list can be asked, before its own filters. */
 export const LIST_PARAMETERS = [

@@ -1,5 +1,5 @@
 import { SLOT_SECONDS } from '../outlook/weather/slots';
-import { KELVIN, logMinutesAt, timeCurve, type ClockSide } from './curve';
+import { logMinutesAt, outsideRows, timeCurve, type ClockSide } from './curve';
 import { rateAt, type RateTable } from './rates';
 import type { TimeTable } from './times';
 
@@ -77,13 +77,6 @@ function runClock(
 	let standstill: Uint8Array | null = null;
 	// A constant time on no curing minimum asks for no temperature.
 	const needed = constantRate === null || least > -Infinity;
-	const [coldest] = curve.kelvin;
-	const warmest = curve.kelvin[curve.kelvin.length - 1];
-	const { kelvin: rows, slope, intercept } = curve;
-	const lastSegment = rows.length - 2;
-	// Temperature moves little from slot to slot, and so does its place among the rows.
-	let segment = 0;
-	let sum = 0;
 	for (let i = 0; i < count; i++) {
 		const temperature = surfaceTemperature[i];
 		let rate = 0;
@@ -91,29 +84,18 @@ function runClock(
 			unknown ??= new Uint8Array(count);
 			unknown[i] = 1;
 		} else {
-			const kelvin = temperature + KELVIN;
-			const isOutside = constantRate === null && (kelvin < coldest || kelvin > warmest);
-			if (isOutside) {
+			if (outsideRows(curve, temperature)) {
 				extrapolated ??= new Uint8Array(count);
 				extrapolated[i] = 1;
 			}
-			if (!(temperature < least)) {
-				if (constantRate !== null) rate = constantRate;
-				else if (isOutside || lastSegment < 0)
-					rate = SLOT_MINUTES * Math.exp(-logMinutesAt(curve, temperature, side));
-				else {
-					while (segment < lastSegment && kelvin > rows[segment + 1]) segment++;
-					while (segment > 0 && kelvin <= rows[segment]) segment--;
-					rate = SLOT_MINUTES * Math.exp(-(intercept[segment] + slope[segment] / kelvin));
-				}
-			}
+			if (!(temperature < least))
+				rate = constantRate ?? SLOT_MINUTES * Math.exp(-logMinutesAt(curve, temperature, side));
 			if (rate === 0) {
 				standstill ??= new Uint8Array(count);
 				standstill[i] = 1;
 			}
 		}
-		sum += rate;
-		progress[i + 1] = sum;
+		progress[i + 1] = progress[i] + rate;
 	}
 	return {
 		progress,

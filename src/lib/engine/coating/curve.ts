@@ -1,6 +1,6 @@
 import type { TimeTable } from './times';
 
-export const KELVIN = 273.15;
+const KELVIN = 273.15;
 /** How far outside its rows a table is carried along the end segment's slope, K. */
 const REACH = 5;
 

@@ -3,7 +3,9 @@ import { and, eq, exists, sql, type SQL } from 'drizzle-orm';
 import { onBehalfOf } from '../db/behalf';
 import type { Database } from '../db/client';
 import { boatPainters, boats, memberships, yards, type Role, type Yard } from '../db/schema';
+import { ROUTE_SCOPES } from './scopes';
 import type { SignedInUser } from './sessions';
+import type { UsedToken } from './tokens';
 
 /** The one place that decides who may. */
 
@@ -65,6 +67,29 @@ export function mayDeleteFile(
 	file: { readonly uploadedBy: string | null }
 ): boolean {
 	return role === 'manager' || file.uploadedBy === user.id;
+}
+
+/**
+ * Why a token may not do what a request asks, before anybody looks whether its person may; null
+ * where it may. A method that says no scope takes no tokens. A yard that is not the token's is as
+ * one that does not exist.
+ */
+export function tokenRefusal(
+	{ scopes, yard }: Pick<UsedToken, 'scopes' | 'yard'>,
+	asked: {
+		readonly request: Pick<Request, 'method'>;
+		readonly route: { readonly id: string | null };
+		readonly params: Readonly<Record<string, string | undefined>>;
+	}
+): { readonly status: 403 | 404; readonly why: string } | null {
+	const method = asked.request.method === 'HEAD' ? 'GET' : asked.request.method;
+	const scope = ROUTE_SCOPES[`${method} ${asked.route.id ?? ''}`];
+	if (scope === undefined) return { status: 403, why: 'This address takes no tokens.' };
+	if (scope === 'open') return null;
+	if (yard !== null && asked.params.slug !== yard)
+		return { status: 404, why: 'There is no such yard, or you do not belong to it.' };
+	if (scopes.includes(scope)) return null;
+	return { status: 403, why: `The token does not hold ${scope}.` };
 }
 
 /** The signed-in person; answers 401 without one. */

@@ -4,7 +4,9 @@ import { yardsOf } from '$lib/server/access/roles';
 import { changePassphrase } from '$lib/server/access/resetPassphrase';
 import { passphraseSchema, passphraseWeakness } from '$lib/server/access/strength';
 import { parts } from '$lib/server/composition';
+import { makeToken, tokensOf, withdrawToken } from '$lib/server/access/tokens';
 import { readForm } from '$lib/server/http/form';
+import { newTokenSchema, SCOPES, TOKEN_DAYS } from '$lib/api/tokens';
 import type { Actions, PageServerLoad } from './$types';
 
 const changeForm = z.object({
@@ -19,7 +21,10 @@ export const load: PageServerLoad = async ({ locals }) => {
 	return {
 		person: { name: user.name, email: user.email },
 		yards: (await yardsOf(db, user.id)).map(({ slug, name, role }) => ({ slug, name, role })),
-		devices: await sessions.devicesOf(user.id, session?.id ?? null)
+		devices: await sessions.devicesOf(user.id, session?.id ?? null),
+		tokens: await tokensOf(db, user.id),
+		scopes: [...SCOPES],
+		tokenDays: [...TOKEN_DAYS]
 	};
 };
 
@@ -49,6 +54,34 @@ export const actions: Actions = {
 		const cookie = await sessions.create(user.id, userAgent);
 		cookies.set(cookie.name, cookie.value, cookie.attributes);
 		return { errors: {}, changed: true };
+	},
+	makeToken: async ({ locals, request }) => {
+		if (locals.user === null) redirect(303, '/sign-in');
+		const form = await request.formData();
+		const said = {
+			name: String(form.get('name') ?? ''),
+			scopes: form.getAll('scope').map(String),
+			yard: String(form.get('yard') ?? ''),
+			days: Number(form.get('days'))
+		};
+		const parsed = newTokenSchema.safeParse({ ...said, yard: said.yard || null });
+		const refused = (errors: Record<string, string>) =>
+			fail(400, { errors: {}, changed: false, token: { said, errors, made: null } });
+		if (!parsed.success)
+			return refused(
+				Object.fromEntries(
+					parsed.error.issues.map(({ path, message }) => [String(path[0]), message])
+				)
+			);
+		const result = await makeToken(parts().db, locals.user.id, parsed.data);
+		if (result.outcome === 'refused') return refused({ [result.field]: result.why });
+		return { errors: {}, changed: false, token: { said: null, errors: {}, made: result.token } };
+	},
+	withdrawToken: async ({ locals, request }) => {
+		if (locals.user === null) redirect(303, '/sign-in');
+		const id = z.uuid().safeParse((await request.formData()).get('token'));
+		if (id.success) await withdrawToken(parts().db, locals.user.id, id.data);
+		redirect(303, '/you');
 	},
 	endDevice: async ({ locals, request }) => {
 		if (locals.user === null) redirect(303, '/sign-in');

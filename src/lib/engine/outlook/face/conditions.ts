@@ -41,41 +41,27 @@ interface Side {
 	readonly shares: Float64Array;
 }
 
-/** Light on one side of a face under its shelter, W/m². */
+/** Light on one side of a face under the open sky. */
 interface SideLight {
 	readonly beam: Float64Array;
 	readonly diffuse: Float64Array;
-	/** Both together; null where no beam ever falls on it, and the sunlit run is the shaded one. */
-	readonly sunlit: Float64Array | null;
 }
 
-function lightOn(
-	weather: SlotWeather,
-	site: Site,
-	face: Face,
-	side: Side,
-	factor: number
-): SideLight {
+function lightOn(weather: SlotWeather, site: Site, face: Face, side: Side): SideLight {
 	const beam = new Float64Array(weather.grid.count);
 	const diffuse = new Float64Array(weather.grid.count);
 	const albedo = site.albedo ?? DEFAULT_ALBEDO;
 	fillFaceIrradiance(weather, side.shares, face.tilt, albedo, beam, diffuse);
-	if (factor !== 1) {
-		for (let i = 0; i < beam.length; i++) {
-			beam[i] *= factor;
-			diffuse[i] *= factor;
-		}
-	}
-	const isSunlit = beam.some((it) => it !== 0);
-	return { beam, diffuse, sunlit: isSunlit ? beam.map((it, i) => it + diffuse[i]) : null };
+	return { beam, diffuse };
 }
 
 /** Arrays that a run fills and nobody keeps; thousands of members would leave megabytes of them. */
-const scratch = new Map<number, Record<'longwave' | 'unseenFilm', Float64Array>>();
+const scratch = new Map<number, Record<'longwave' | 'sunlit' | 'unseenFilm', Float64Array>>();
 
 function scratchOf(count: number) {
 	const made = scratch.get(count) ?? {
 		longwave: new Float64Array(count),
+		sunlit: new Float64Array(count),
 		unseenFilm: new Float64Array(count)
 	};
 	// Grids of one process are of few lengths; keep the last.
@@ -83,6 +69,9 @@ function scratchOf(count: number) {
 	scratch.set(count, made);
 	return made;
 }
+
+const scaled = (values: Float64Array, factor: number): Float64Array =>
+	factor === 1 ? values : values.map((value) => value * factor);
 
 function conditionsOfSide(
 	weather: SlotWeather,
@@ -97,12 +86,16 @@ function conditionsOfSide(
 	const lee = face.lee ?? [];
 	const air = inLee(airAtFace(weather, factors, roughness), weather, factors, roughness, lee);
 	const { count } = weather.grid;
-	const { beam, diffuse: shaded, sunlit } = light;
-	const { longwave, unseenFilm } = scratchOf(count);
+	const beam = scaled(light.beam, factors.sun);
+	const shaded = scaled(light.diffuse, factors.sun);
+	const { longwave, sunlit, unseenFilm } = scratchOf(count);
 	const skySeen = skyView(face.tilt) * factors.sky;
+	let isSunlit = false;
 	for (let i = 0; i < count; i++) {
 		// What is not sky is ground or cover, at air temperature.
 		longwave[i] = air.surroundings[i] + skySeen * air.skyExcess[i];
+		sunlit[i] = beam[i] + shaded[i];
+		if (beam[i] !== 0) isSunlit = true;
 	}
 	const drive: SurfaceDrive = {
 		airTemperature: air.airTemperature,
@@ -123,7 +116,7 @@ function conditionsOfSide(
 	const film = new Float64Array(count);
 	const starts = runSurface(drive, shaded, body, surfaceShaded, film, stepsPerSlot);
 	let surfaceSunlit = surfaceShaded;
-	if (sunlit !== null) {
+	if (isSunlit) {
 		surfaceSunlit = new Float64Array(count);
 		runSurface(drive, sunlit, body, surfaceSunlit, unseenFilm, stepsPerSlot);
 	}
@@ -195,15 +188,7 @@ export function faceConditions(
 	const factors = shelterFactors(shelter);
 	const washed = washedSlots(weather.grid, washedAt);
 	return sidesOf(weather, face).map((side) =>
-		conditionsOfSide(
-			weather,
-			site,
-			face,
-			lightOn(weather, site, face, side, factors.sun),
-			factors,
-			washed,
-			3
-		)
+		conditionsOfSide(weather, site, face, lightOn(weather, site, face, side), factors, washed, 3)
 	);
 }
 
@@ -222,12 +207,11 @@ export function memberConditions(
 	const factors = shelterFactors(shelter);
 	const sides = sidesOf(weather, face).map((side) => ({
 		side,
-		light: lightOn(weather, site, face, side, factors.sun)
+		light: lightOn(weather, site, face, side)
 	}));
 	return members.map((member) =>
 		sides.map(({ side, light }) => {
-			const own =
-				member.ghi === weather.ghi ? light : lightOn(member, site, face, side, factors.sun);
+			const own = member.ghi === weather.ghi ? light : lightOn(member, site, face, side);
 			return conditionsOfSide(member, site, face, own, factors, washed, 1);
 		})
 	);

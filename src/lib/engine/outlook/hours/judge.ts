@@ -5,15 +5,7 @@ import type { Site } from '../weather/site';
 import type { FaceConditions, SlotGrid, SlotWeather } from '../weather/slots';
 import { airLimits, faceLimits } from './applyLimits';
 import type { ErrorSeries } from './errors';
-import {
-	emptied,
-	leastRooms,
-	limiterAt,
-	limiterCode,
-	takeLeast,
-	type LeastRooms,
-	type Limit
-} from './limit';
+import { leastRooms, limiterAt, limiterCode, takeLeast, type Limit } from './limit';
 import { facePhases, type FacePhases } from './phaseEnds';
 import { dryingIsSilent } from './phases';
 import { BROKEN, MOST_ROOM } from './roomSeries';
@@ -112,42 +104,19 @@ const HOURS = limiterCode('hours');
 const DARK = limiterCode('dark');
 
 /** For each slot and one more, the first marked slot from it on; past the end without one. */
-function fillNextMarked(marks: Uint8Array, next: Int32Array): void {
+export function nextMarked(marks: Uint8Array): Int32Array {
 	const count = marks.length;
+	const next = new Int32Array(count + 1);
 	next[count] = count + 2;
 	for (let i = count - 1; i >= 0; i--) next[i] = marks[i] ? i : next[i + 1];
+	return next;
 }
 
-/** Arrays that drawing limits together fills and nobody keeps; each step would leave many of them. */
-interface Scratch {
-	readonly least: LeastRooms;
-	readonly group: LeastRooms;
-	readonly bindsAt: Int32Array;
-	readonly missingLater: Uint8Array;
-	readonly windowRoom: Float64Array;
-	readonly windowAt: Int32Array;
-	readonly nextUnknown: Int32Array;
-	readonly known: Int32Array;
-}
-let scratch: Scratch | null = null;
-
-function scratchOf(count: number): Scratch {
-	// Grids of one process are of few lengths; the last is kept.
-	if (scratch?.bindsAt.length !== count)
-		scratch = {
-			least: leastRooms(count),
-			group: leastRooms(count),
-			bindsAt: new Int32Array(count),
-			missingLater: new Uint8Array(count),
-			windowRoom: new Float64Array(count),
-			windowAt: new Int32Array(count),
-			nextUnknown: new Int32Array(count + 1),
-			known: new Int32Array(count)
-		};
-	emptied(scratch.least);
-	scratch.bindsAt.fill(-1);
-	scratch.missingLater.fill(0);
-	return scratch;
+/** Ends no later than a slot. */
+function clipped(ends: Int32Array, most: number): Int32Array {
+	const out = new Int32Array(ends.length);
+	for (let i = 0; i < out.length; i++) out[i] = ends[i] < most ? ends[i] : most;
+	return out;
 }
 
 /**
@@ -157,8 +126,7 @@ function scratchOf(count: number): Scratch {
 export function slotStates({ weather, apply, phases, masks, silentDrying }: Judgement): SlotStates {
 	const { count } = weather.grid;
 	const { knownFrom, knownTo } = weather;
-	const { least, group, bindsAt, missingLater, windowRoom, windowAt, nextUnknown, known } =
-		scratchOf(count);
+	const least = leastRooms(count);
 	const missingNow = least.unknown;
 	apply.forEach((limit, index) => {
 		takeLeast(limit, index, least);
@@ -169,18 +137,22 @@ export function slotStates({ weather, apply, phases, masks, silentDrying }: Judg
 
 	// Of the limits that bind: their place in one list, and the slot where they do.
 	const list = [...apply];
+	const bindsAt = new Int32Array(count).fill(-1);
+	const missingLater = new Uint8Array(count);
+	const windowRoom = new Float64Array(count);
+	const windowAt = new Int32Array(count);
 	for (const { phases: ofFace, wetEnds } of phases) {
 		for (let i = 0; i < count; i++) if (wetEnds[i] > knownTo) missingLater[i] = 1;
 		for (const { limits, ends, needs } of ofFace) {
-			emptied(group);
+			const group = leastRooms(count);
 			for (const limit of limits) {
 				takeLeast(limit, list.length, group);
 				list.push(limit);
 			}
 			if (needs !== null)
 				for (let i = 0; i < count; i++) if (needs[i] !== needs[i]) group.unknown[i] = 1;
-			fillNextMarked(group.unknown, nextUnknown);
-			for (let i = 0; i < count; i++) known[i] = ends[i] < knownTo ? ends[i] : knownTo;
+			const nextUnknown = nextMarked(group.unknown);
+			const known = clipped(ends, knownTo);
 			windowMinima(group.room, 1, known, windowRoom, windowAt);
 			for (let i = 0; i < count; i++) {
 				if (windowRoom[i] < least.room[i]) {

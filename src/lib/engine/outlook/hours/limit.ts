@@ -92,19 +92,11 @@ export interface LeastRooms {
 
 /** Room for the least of several limits over so many slots. */
 export function leastRooms(count: number): LeastRooms {
-	return emptied({
-		room: new Float64Array(count),
-		which: new Int16Array(count),
+	return {
+		room: new Float64Array(count).fill(Infinity),
+		which: new Int16Array(count).fill(-1),
 		unknown: new Uint8Array(count)
-	});
-}
-
-/** The same, with nothing in it. */
-export function emptied(least: LeastRooms): LeastRooms {
-	least.room.fill(Infinity);
-	least.which.fill(-1);
-	least.unknown.fill(0);
-	return least;
+	};
 }
 
 /** Takes a limit's rooms into the least so far, under an index of the caller's. */

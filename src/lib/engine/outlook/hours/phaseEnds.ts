@@ -19,23 +19,10 @@ export interface FacePhases {
 	readonly clocks: readonly { readonly clock: CureClock; readonly ends: Int32Array }[];
 }
 
-const emptyWindows = new Map<number, Int32Array>();
-
-/** Ends of the empty window after each slot: nothing to wait for. Shared, not to be written. */
+/** Ends of the empty window after each slot: nothing to wait for. */
 function nextSlots(count: number): Int32Array {
-	const made = emptyWindows.get(count) ?? Int32Array.from({ length: count }, (_, i) => i + 1);
-	// Grids of one process are of few lengths; keep the last.
-	if (!emptyWindows.has(count)) emptyWindows.clear();
-	emptyWindows.set(count, made);
-	return made;
-}
-
-const endsOfClock = new WeakMap<CureClock, Int32Array>();
-
-/** Where a clock begun at the end of each slot is done, once per clock. */
-function finishesOf(clock: CureClock): Int32Array {
-	const ends = endsOfClock.get(clock) ?? finishSlots(clock.progress).subarray(1);
-	endsOfClock.set(clock, ends);
+	const ends = new Int32Array(count);
+	for (let i = 0; i < count; i++) ends[i] = i + 1;
 	return ends;
 }
 
@@ -63,14 +50,13 @@ export function facePhases(
 		if (known !== undefined) return known.ends;
 		// Earliest clocks run on the coldest spot.
 		const clock = cureClock(table, face.surfaceShaded, 'earliest', step.limits.curing?.min);
-		const ends = finishesOf(clock);
+		const ends = finishSlots(clock.progress).subarray(1);
 		clocks.set(name, { clock, ends });
 		return ends;
 	};
 	const phases = phasesOf(step, face, faceIndex, errors).map((phase) => ({
 		...phase,
-		// No window ends before the slot after.
-		ends: phase.until.length === 0 ? none : phase.until.map(endsOf).reduce(later)
+		ends: phase.until.map(endsOf).reduce(later, none)
 	}));
 	const [wet, , set] = phases;
 	return {

@@ -51,10 +51,7 @@ function stepFlags(
 	firstStart: number
 ): StepFlag[] {
 	const flags = new Set<StepFlag>();
-	for (const { wetEnds, setEnds, clocks: all } of phases) {
-		const clocks = all.filter(
-			({ clock }) => clock.extrapolated !== null || clock.standstill !== null
-		);
+	for (const { wetEnds, setEnds, clocks } of phases) {
 		for (let i = Math.max(0, firstStart); i < state.length; i++) {
 			if (state[i] === SHUT) continue;
 			if (setEnds[i] > knownTo && wetEnds[i] <= knownTo) flags.add('setPastEnd');

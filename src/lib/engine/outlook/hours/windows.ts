@@ -3,9 +3,6 @@
  * A NaN inside a window makes its result NaN.
  */
 
-/** The queue of one call, kept: thousands of calls would leave megabytes of them. */
-let scratch = new Int32Array(0);
-
 /** Least value in each window; +Infinity for an empty one. `out[i]` belongs to window i. */
 export function windowMinima(
 	values: Float64Array,
@@ -16,8 +13,7 @@ export function windowMinima(
 ): void {
 	const count = values.length;
 	// Indices of a rising run of candidates; the head is the least of the window.
-	if (scratch.length <= count) scratch = new Int32Array(count + 1);
-	const queue = scratch;
+	const queue = new Int32Array(count + 1);
 	let head = 0;
 	let tail = 0;
 	let next = 0;

@@ -1,4 +1,4 @@
-import { cureClock, progressAt, type CureClock } from '../../coating/cure';
+import { cureClock, progressAt } from '../../coating/cure';
 import type { ClockSide } from '../../coating/curve';
 import { asksNoWait, type TimeTable } from '../../coating/times';
 import type { FaceConditions } from '../weather/slots';
@@ -14,27 +14,11 @@ interface FaceClock {
 	readonly progress: Float64Array;
 	/** First slot of unknown temperature from each slot on; null where there is none. */
 	readonly nextUnknown: Int32Array | null;
+	/** Progress a slot before the grid: none for earliest clocks, the first day's most for latest ones. */
+	readonly before: number;
+	/** Progress from the forecast's end over the mean day of its last three, slot by slot; null without them. */
+	readonly cycle: Float64Array | null;
 	readonly side: ClockSide;
-	/** Worked out where first asked for. */
-	before: number | undefined;
-	cycle: Float64Array | null | undefined;
-}
-
-/** Progress a slot before the grid: none for earliest clocks, the first day's most for latest ones. */
-function beforeGrid(clock: FaceClock): number {
-	if (clock.before !== undefined) return clock.before;
-	const { progress, side } = clock;
-	let most = 0;
-	if (side === 'latest')
-		for (let i = 0; i < Math.min(DAY, progress.length - 1); i++)
-			most = Math.max(most, progress[i + 1] - progress[i]);
-	return (clock.before = most);
-}
-
-/** Progress from the forecast's end over the mean day of its last three, slot by slot; null without them. */
-function pastEnd(clock: FaceClock): Float64Array | null {
-	if (clock.cycle === undefined) clock.cycle = meanCycle(clock.progress, clock.nextUnknown);
-	return clock.cycle;
 }
 
 /** Progress within the mean cycle of the last days before a slot, beginning at that slot. */
@@ -53,9 +37,7 @@ function meanCycle(progress: Float64Array, unknown: Int32Array | null): Float64A
 	return cycle;
 }
 
-const remembered = new WeakMap<CureClock, FaceClock>();
-
-/** The clock of a table on a face's temperature; a temperature belongs to one face and its weather. */
+/** The clock of a table on a face's temperature. */
 function faceClock(
 	table: Exclude<TimeTable, null>,
 	face: FaceConditions,
@@ -63,10 +45,8 @@ function faceClock(
 	side: ClockSide,
 	curingMin: number
 ): FaceClock {
-	const clock = cureClock(table, temperature, side, curingMin);
-	const known = remembered.get(clock);
-	if (known !== undefined) return known;
 	const end = Math.min(face.weather.knownTo, temperature.length);
+	const clock = cureClock(table, temperature, side, curingMin);
 	const progress = clock.progress.subarray(0, end + 1);
 	const unknown = clock.unknown !== null && clock.unknown[end] > 0 ? clock.unknown : null;
 	let nextUnknown: Int32Array | null = null;
@@ -75,18 +55,18 @@ function faceClock(
 		for (let i = end - 1; i >= 0; i--)
 			nextUnknown[i] = unknown[i + 1] > unknown[i] ? i : nextUnknown[i + 1];
 	}
-	const made: FaceClock = { progress, nextUnknown, side, before: undefined, cycle: undefined };
-	remembered.set(clock, made);
-	return made;
+	let before = 0;
+	if (side === 'latest')
+		for (let i = 0; i < Math.min(DAY, end); i++)
+			before = Math.max(before, progress[i + 1] - progress[i]);
+	return { progress, nextUnknown, before, cycle: meanCycle(progress, nextUnknown), side };
 }
 
 /** Rounding of a sum of many slots. */
 const ROUNDING = 1e-9;
 
 /** Progress past the forecast's end at a position. */
-function progressPast(clock: FaceClock, position: number): number {
-	const { progress } = clock;
-	const cycle = pastEnd(clock);
+function progressPast({ progress, cycle }: FaceClock, position: number): number {
 	const end = progress.length - 1;
 	if (cycle === null) return progress[end];
 	const past = position - end;
@@ -95,9 +75,7 @@ function progressPast(clock: FaceClock, position: number): number {
 }
 
 /** Position past the forecast's end at which a progress is made; +Infinity where it never is. */
-function positionPast(clock: FaceClock, target: number): number {
-	const { progress } = clock;
-	const cycle = pastEnd(clock);
+function positionPast({ progress, cycle }: FaceClock, target: number): number {
 	const end = progress.length - 1;
 	if (cycle === null || !(cycle[DAY] > 0)) return Infinity;
 	const rest = target - progress[end];
@@ -112,22 +90,21 @@ function positionPast(clock: FaceClock, target: number): number {
 
 /** Where clocks started at rising positions are done. */
 function doneOn(clock: FaceClock, positions: Float64Array, isCarriedOn: boolean): Float64Array {
-	const { progress, nextUnknown, side } = clock;
+	const { progress, nextUnknown, before, side } = clock;
 	const end = progress.length - 1;
 	const done = new Float64Array(positions.length);
 	let slot = 0;
-	for (let k = 0; k < positions.length; k++) {
-		const position = positions[k];
+	positions.forEach((position, k) => {
 		const started =
 			position < 0
-				? position * beforeGrid(clock)
+				? position * before
 				: position <= end
 					? progressAt(progress, position)
 					: progressPast(clock, position);
 		const target = started + 1;
 		if (target <= 0) {
-			done[k] = position + 1 / beforeGrid(clock);
-			continue;
+			done[k] = position + 1 / before;
+			return;
 		}
 		slot = Math.max(slot, Math.min(end, Math.max(0, Math.floor(position))));
 		while (slot < end && progress[slot + 1] < target - ROUNDING) slot++;
@@ -140,7 +117,7 @@ function doneOn(clock: FaceClock, positions: Float64Array, isCarriedOn: boolean)
 			const part = rate > 0 ? Math.min(1, (target - progress[slot]) / rate) : 1;
 			done[k] = Math.max(position, slot + part);
 		} else done[k] = isCarriedOn ? positionPast(clock, target) : Infinity;
-	}
+	});
 	return done;
 }
 
@@ -173,9 +150,9 @@ export function reachedAt(question: ClockQuestion, positions: Float64Array): Flo
 	for (const face of sides) {
 		const temperature = run === 'shaded' ? face.surfaceShaded : face.surfaceSunlit;
 		const clock = faceClock(table, face, temperature, side, isEarliest ? curingMin : -Infinity);
-		const done = doneOn(clock, positions, isCarriedOn);
-		for (let k = 0; k < done.length; k++)
-			worst[k] = isEarliest ? Math.max(worst[k], done[k]) : Math.min(worst[k], done[k]);
+		doneOn(clock, positions, isCarriedOn).forEach((done, k) => {
+			worst[k] = isEarliest ? Math.max(worst[k], done) : Math.min(worst[k], done);
+		});
 	}
 	// Sums of many slots may fall back by a rounding; what is later is never through sooner.
 	for (let k = 1; k < worst.length; k++)

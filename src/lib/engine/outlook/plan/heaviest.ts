@@ -16,9 +16,6 @@ export function heaviestWay(chain: Chain, domains: Domains): Int32Array | null {
 	const { steps, gaps } = chain;
 	const low = earliestWay(chain, domains).places;
 	if (low === null) return null;
-	const startsAt = (places: Int32Array): Int32Array =>
-		places.map((place, step) => domains[step][place]);
-	if (isLevel(chain, domains)) return startsAt(low);
 	const high = latestWay(chain, domains);
 	const scoreAt = (step: number, place: number): number => steps[step].score[domains[step][place]];
 	// The first place of a step is always taken and has no node.
@@ -28,14 +25,21 @@ export function heaviestWay(chain: Chain, domains: Domains): Int32Array | null {
 	const from: number[] = [];
 	const to: number[] = [];
 	const nodeOf = (step: number, place: number): number => offset[step] + place - low[step] - 1;
+	let isLevel = true;
 	steps.forEach((_, step) => {
 		for (let place = low[step] + 1; place <= high[step]; place++) {
-			weights[nodeOf(step, place)] = scoreAt(step, place) - scoreAt(step, place - 1);
+			const weight = scoreAt(step, place) - scoreAt(step, place - 1);
+			weights[nodeOf(step, place)] = weight;
+			if (weight > 0) isLevel = false;
 			if (place - 1 === low[step]) continue;
 			from.push(nodeOf(step, place));
 			to.push(nodeOf(step, place - 1));
 		}
 	});
+	const startsAt = (places: Int32Array): Int32Array =>
+		places.map((place, step) => domains[step][place]);
+	// Nothing is won by a later start.
+	if (isLevel) return startsAt(low);
 	for (const gap of gaps) {
 		const { start } = steps[gap.to];
 		const before = domains[gap.from];
@@ -66,14 +70,4 @@ export function heaviestWay(chain: Chain, domains: Domains): Int32Array | null {
 			return at;
 		})
 	);
-}
-
-/** Whether no start has a greater score than one before it: nothing is won by a later one. */
-function isLevel({ steps }: Chain, domains: Domains): boolean {
-	return domains.every((domain, step) => {
-		const { score } = steps[step];
-		for (let i = 1; i < domain.length; i++)
-			if (score[domain[i]] > score[domain[i - 1]]) return false;
-		return true;
-	});
 }

@@ -11,39 +11,15 @@ import { POSITION_ROUNDING, type Chain, type Gap } from './chain';
 /** Starts of each step that may be used, as indices, rising. */
 export type Domains = readonly Int32Array[];
 
-/** Which starts a plan may take. */
-export interface Allowed {
-	/** Launch-ready at the latest, a slot position. */
-	readonly readyBy: number;
-	/** 1 where a start may be taken, per step; null: all. */
-	readonly starts: readonly (Uint8Array | null)[] | null;
-}
-
 /** The starts allowed, without those that no later step can follow. */
-export function domainsOf({ steps, gaps }: Chain, { readyBy, starts }: Allowed): Domains {
-	return steps.map(({ start, ready }, step) => {
-		const bounds = gaps.filter((gap) => gap.from === step);
-		const mask = starts?.[step] ?? null;
-		const usable = new Int32Array(start.length);
-		let count = 0;
-		for (let k = 0; k < start.length; k++) {
-			if (!(ready[k] <= readyBy) || (mask !== null && mask[k] === 0)) continue;
-			let isFollowed = true;
-			for (const { earliest } of bounds) if (earliest[k] === Infinity) isFollowed = false;
-			if (isFollowed) usable[count++] = k;
-		}
-		return usable.subarray(0, count);
-	});
-}
-
-/** The starts of domains with at least so much room. */
-export function roomierThan({ steps }: Chain, domains: Domains, least: number): Domains {
-	return domains.map((domain, step) => {
-		const { room } = steps[step];
-		const usable = new Int32Array(domain.length);
-		let count = 0;
-		for (const k of domain) if (room[k] >= least) usable[count++] = k;
-		return usable.subarray(0, count);
+export function domainsOf({ steps, gaps }: Chain, allowed: readonly Uint8Array[]): Domains {
+	return steps.map(({ start }, step) => {
+		const bounds = gaps.filter((gap) => gap.from === step).map(({ earliest }) => earliest);
+		const usable: number[] = [];
+		for (let k = 0; k < start.length; k++)
+			if (allowed[step][k] === 1 && bounds.every((earliest) => earliest[k] < Infinity))
+				usable.push(k);
+		return Int32Array.from(usable);
 	});
 }
 
@@ -54,9 +30,8 @@ export type EarliestWay =
 
 export function earliestWay({ steps, gaps }: Chain, domains: Domains): EarliestWay {
 	const places = new Int32Array(steps.length);
-	const here: Gap[] = [];
 	for (let step = 0; step < steps.length; step++) {
-		for (const gap of gaps) if (gap.to === step) here.push(gap);
+		const here = gaps.filter((gap) => gap.to <= step);
 		if (domains[step].length === 0 || !raise(steps, here, domains, places))
 			return { places: null, outOfReach: step };
 	}

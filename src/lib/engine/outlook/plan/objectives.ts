@@ -1,6 +1,6 @@
 import type { Chain } from './chain';
 import { heaviestWay } from './heaviest';
-import { domainsOf, earliestWay, roomierThan, type Allowed, type Domains } from './lattice';
+import { domainsOf, earliestWay } from './lattice';
 
 /** A way through a chain with what it is ranked by. */
 export interface RankedWay {
@@ -48,10 +48,17 @@ function ranked(chain: Chain, starts: Int32Array): RankedWay {
 	return { starts, room, score, ready };
 }
 
-const allowedBy = (bounds: PlanBounds, readyBy: number): Allowed => ({
-	readyBy,
-	starts: bounds.allowed ?? null
-});
+/** Masks of the starts with at least so much room, ready by a position, and allowed. */
+function masks(chain: Chain, least: number, readyBy: number, bounds: PlanBounds): Uint8Array[] {
+	return chain.steps.map(({ room, ready }, i) => {
+		const allowed = bounds.allowed?.[i] ?? null;
+		const mask = new Uint8Array(room.length);
+		for (let k = 0; k < mask.length; k++)
+			if (room[k] >= least && ready[k] <= readyBy && (allowed === null || allowed[k] === 1))
+				mask[k] = 1;
+		return mask;
+	});
+}
 
 /**
  * Of the ways that a search finds under a bound on readiness, the one ready first. Readiness grows
@@ -85,90 +92,62 @@ function readyFirst(
 const isRising = ({ steps }: Chain): boolean =>
 	steps.every(({ ready }) => ready.every((it, k) => k === 0 || it >= ready[k - 1]));
 
-/** The starts taken at places in domains. */
-const startsAt = (domains: Domains, places: Int32Array): Int32Array =>
-	places.map((place, step) => domains[step][place]);
+/** The way of earliest starts with at least so much room, ready by a position. */
+function earliest(
+	chain: Chain,
+	least: number,
+	readyBy: number,
+	bounds: PlanBounds
+): RankedWay | null {
+	const domains = domainsOf(chain, masks(chain, least, readyBy, bounds));
+	const { places } = earliestWay(chain, domains);
+	return places === null
+		? null
+		: ranked(
+				chain,
+				places.map((place, step) => domains[step][place])
+			);
+}
 
 /** The first step of a chain that no way reaches; null where one goes through. */
 export function firstOutOfReach(chain: Chain, bounds: PlanBounds = {}): number | null {
-	const allowed = allowedBy(bounds, bounds.readyBy ?? Infinity);
+	const allowed = masks(chain, -Infinity, bounds.readyBy ?? Infinity, bounds);
 	return earliestWay(chain, domainsOf(chain, allowed)).outOfReach;
 }
 
 /** Launch-ready soonest, then the earliest starts from the last step backwards. Null: no way. */
 export function soonest(chain: Chain, bounds: PlanBounds = {}): RankedWay | null {
-	return readyFirst(chain, bounds.readyBy ?? Infinity, (by) => {
-		const domains = domainsOf(chain, allowedBy(bounds, by));
-		const { places } = earliestWay(chain, domains);
-		return places === null ? null : ranked(chain, startsAt(domains, places));
-	});
+	return readyFirst(chain, bounds.readyBy ?? Infinity, (by) =>
+		earliest(chain, -Infinity, by, bounds)
+	);
 }
 
-/** The starts from which the way with the most room at its least is made, no other; null without a way. */
-function roomiest(chain: Chain, all: Domains): Domains | null {
-	const { places } = earliestWay(chain, all);
-	if (places === null) return null;
-	let low = ranked(chain, startsAt(all, places)).room;
-	let best = roomierThan(chain, all, low);
-	/** The room of a way with at least so much; null without one. */
-	const tryFor = (least: number): number | null => {
-		const domains = roomierThan(chain, all, least);
-		const way = earliestWay(chain, domains);
-		if (way.places === null) return null;
-		best = domains;
-		return ranked(chain, startsAt(domains, way.places)).room;
-	};
-	// No way has more than the step with the least to offer, and often one has as much.
-	const high = mostOffered(chain, all);
-	if (low === high || tryFor(high) !== null) return best;
-	const rooms = roomsBetween(chain, all, low, high);
-	let from = 0;
-	let to = rooms.length;
-	while (from < to) {
-		const middle = (from + to) >> 1;
-		const room = tryFor(rooms[middle]);
-		if (room === null) to = middle;
+/** The most room that a way has at its least; null without a way. */
+function mostRoom(chain: Chain, readyBy: number, bounds: PlanBounds): number | null {
+	let best = earliest(chain, -Infinity, readyBy, bounds);
+	if (best === null) return null;
+	const rooms = [...new Set(chain.steps.flatMap(({ room }) => [...room]))].sort((a, b) => a - b);
+	let low = rooms.indexOf(best.room);
+	let high = rooms.length - 1;
+	while (low < high) {
+		const middle = (low + high + 1) >> 1;
+		const way = earliest(chain, rooms[middle], readyBy, bounds);
+		if (way === null) high = middle - 1;
 		else {
-			low = room;
-			from = middle + 1;
-			while (from < to && rooms[from] <= low) from++;
+			best = way;
+			low = Math.max(middle, rooms.indexOf(way.room));
 		}
 	}
-	return roomierThan(chain, all, low);
-}
-
-/** The rooms of starts strictly between two, rising. */
-function roomsBetween({ steps }: Chain, domains: Domains, low: number, high: number): Float64Array {
-	const rooms = new Float64Array(domains.reduce((sum, domain) => sum + domain.length, 0));
-	let count = 0;
-	domains.forEach((domain, step) => {
-		const { room } = steps[step];
-		for (const k of domain) if (room[k] > low && room[k] < high) rooms[count++] = room[k];
-	});
-	return rooms.subarray(0, count).sort();
-}
-
-/** The least, over the steps, of the most room that each has. */
-function mostOffered({ steps }: Chain, domains: Domains): number {
-	let least = Infinity;
-	steps.forEach(({ room }, step) => {
-		let most = -Infinity;
-		for (const k of domains[step]) if (room[k] > most) most = room[k];
-		if (most < least) least = most;
-	});
-	return least;
+	return best.room;
 }
 
 /** Largest least room, then the largest sum of scores, then soonest. Null: no way. */
 export function surest(chain: Chain, bounds: PlanBounds = {}): RankedWay | null {
 	const readyBy = bounds.readyBy ?? Infinity;
-	const domains = roomiest(chain, domainsOf(chain, allowedBy(bounds, readyBy)));
-	if (domains === null) return null;
+	const room = mostRoom(chain, readyBy, bounds);
+	if (room === null) return null;
 	const heaviest = (by: number): RankedWay | null => {
-		const inTime = domains.map((domain, step) =>
-			by === readyBy ? domain : domain.filter((k) => chain.steps[step].ready[k] <= by)
-		);
-		const starts = heaviestWay(chain, inTime);
+		const starts = heaviestWay(chain, domainsOf(chain, masks(chain, room, by, bounds)));
 		return starts === null ? null : ranked(chain, starts);
 	};
 	const best = heaviest(readyBy);
@@ -176,12 +155,4 @@ export function surest(chain: Chain, bounds: PlanBounds = {}): RankedWay | null 
 		const way = by === readyBy ? best : heaviest(by);
 		return way !== null && way.score === best?.score ? way : null;
 	});
-}
-
-/** Whether a way keeps bounds; the best of all ways is then the best of those that do. */
-export function keepsBounds(chain: Chain, way: RankedWay, bounds: PlanBounds): boolean {
-	return (
-		chain.steps.every(({ ready }, i) => ready[way.starts[i]] <= (bounds.readyBy ?? Infinity)) &&
-		(bounds.allowed ?? []).every((allowed, i) => allowed === null || allowed[way.starts[i]] === 1)
-	);
 }

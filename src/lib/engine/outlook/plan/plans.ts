@@ -12,7 +12,6 @@ import {
 	bySoonest,
 	bySurest,
 	firstOutOfReach,
-	keepsBounds,
 	soonest,
 	surest,
 	type PlanBounds,
@@ -37,7 +36,6 @@ function launchAllows(steps: readonly ChainStep[], launch: number): (Uint8Array 
 
 interface Found {
 	readonly steps: readonly ChainStep[];
-	readonly chain: Chain;
 	readonly way: RankedWay;
 }
 
@@ -88,7 +86,7 @@ export function plansOf(
 				.flatMap((places): Found[] => {
 					const { chain, steps } = chainWith(places);
 					const way = search(chain, boundsOf(steps));
-					return way === null ? [] : [{ steps, chain, way }];
+					return way === null ? [] : [{ steps, way }];
 				})
 				.sort((a, b) => order(a.way, b.way))[0] ?? null;
 		const without = bestOf([[]]);
@@ -108,25 +106,23 @@ export function plansOf(
 		}
 		return null;
 	};
-	const told = (found: Found | null): Plan | null =>
-		found === null ? null : planOf(yard, found.steps, found.way, job.launch);
+	const told = (wanted: Wanted): Plan | null => {
+		const found = find(wanted);
+		return found === null ? null : planOf(yard, found.steps, found.way, job.launch);
+	};
 	const free = (): PlanBounds => ({});
-	const earliest = find({ search: soonest, order: bySoonest, boundsOf: free });
-	// Where no way goes through at all, none does with more asked of it.
-	const roomiest =
-		earliest === null ? null : find({ search: surest, order: bySurest, boundsOf: free });
-	const plans = { soonest: told(earliest), surest: told(roomiest) };
 	const launch = chosenLaunch(job.launch);
-	if (launch === null || roomiest === null) return { ...plans, byDate: null };
-	const readyBy = positionOf(grid, launch);
-	const boundsOf = (steps: readonly ChainStep[]): PlanBounds => ({
-		readyBy,
-		allowed: launchAllows(steps, readyBy)
-	});
+	const position = launch === null ? null : positionOf(grid, launch);
 	return {
-		...plans,
-		byDate: keepsBounds(roomiest.chain, roomiest.way, boundsOf(roomiest.steps))
-			? plans.surest
-			: told(find({ search: surest, order: bySurest, boundsOf }))
+		soonest: told({ search: soonest, order: bySoonest, boundsOf: free }),
+		surest: told({ search: surest, order: bySurest, boundsOf: free }),
+		byDate:
+			position === null
+				? null
+				: told({
+						search: surest,
+						order: bySurest,
+						boundsOf: (steps) => ({ readyBy: position, allowed: launchAllows(steps, position) })
+					})
 	};
 }

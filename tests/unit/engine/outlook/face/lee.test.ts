@@ -155,7 +155,7 @@ describe('whatever the lee', () => {
 					});
 				}
 			),
-			{ numRuns: 40 }
+			{ numRuns: 100 }
 		);
 	});
 
