@@ -213,7 +213,6 @@ export const ROUTES: Readonly<Record<string, Row>> = {
 	'GET /api/v1/yards/[slug]/steps.csv': OF_YARD,
 	'GET /api/v1/yards/[slug]/people': OF_MANAGER,
 	'GET /api/v1/yards/[slug]/people.csv': OF_MANAGER,
-	'GET /api/v1/yards/[slug]/stands': OF_YARD,
 	'GET /api/v1/yards/[slug]/stands.csv': OF_YARD,
 	'load /[yard]/jobs': OF_YARD,
 	'GET /api/v1/health': OPEN,
