@@ -214,6 +214,9 @@ export const ROUTES: Readonly<Record<string, Row>> = {
 	'GET /api/v1/yards/[slug]/people': OF_MANAGER,
 	'GET /api/v1/yards/[slug]/people.csv': OF_MANAGER,
 	'GET /api/v1/yards/[slug]/stands.csv': OF_YARD,
+	'GET /api/v1/yards/[slug]/changes': OF_MANAGER,
+	'GET /api/v1/yards/[slug]/changes.csv': OF_MANAGER,
+	'load /[yard]/changes': OF_MANAGER,
 	'load /[yard]/jobs': OF_YARD,
 	'GET /api/v1/health': OPEN,
 

@@ -1,4 +1,5 @@
 import { boatsSchema } from '../lists/boats';
+import { changesSchema } from '../lists/changes';
 import { peopleSchema } from '../lists/people';
 import { stepsSchema } from '../lists/steps';
 import { ROLES } from '../roles';
@@ -80,6 +81,19 @@ export const listsPart: Part = {
 			[optional('role', 'Only those in a role', oneOf(ROLES))],
 			403
 		),
+		...list(
+			'changes',
+			'Who changed what, the newest first; for managers',
+			'Changes',
+			[
+				optional('person', 'Only those of a person', UUID),
+				optional('boat', 'Only those of a boat', UUID),
+				optional('subject', 'Only those of a kind of thing', { type: 'string' }),
+				optional('from', 'Not before this day of the yard', { type: 'string', format: 'date' }),
+				optional('to', 'Not after this day of the yard', { type: 'string', format: 'date' })
+			],
+			403
+		),
 		// The stands themselves are described with the yard's settings.
 		...Object.fromEntries(
 			Object.entries(
@@ -90,6 +104,7 @@ export const listsPart: Part = {
 	schemas: {
 		Boats: schemaOf(boatsSchema, 'output'),
 		Steps: schemaOf(stepsSchema, 'output'),
-		People: schemaOf(peopleSchema, 'output')
+		People: schemaOf(peopleSchema, 'output'),
+		Changes: schemaOf(changesSchema, 'output')
 	}
 };

@@ -40,6 +40,8 @@ const PERMISSIONS = {
 	changeBoat: ['manager', 'owner'],
 	/** Add photos and PDFs to a boat that one may see; whose one may delete, says {@link mayDeleteFile}. */
 	addFile: ['manager', 'owner', 'painter'],
+	/** See who changed what in the yard. */
+	seeChanges: ['manager'],
 	/** See everybody of the yard and who was asked, and take an invitation back. */
 	seePeople: ['manager']
 } as const satisfies Record<string, readonly Role[]>;

@@ -34,6 +34,8 @@ export const ROUTE_SCOPES: Readonly<Record<string, Scope | 'open'>> = {
 	[`PATCH ${YARD}`]: 'settings:write',
 	[`POST ${YARD}/boats/[boat]/faces`]: 'boats:write',
 	[`POST ${YARD}/stands`]: 'settings:write',
+	[`GET ${YARD}/changes`]: 'changes:read',
+	[`GET ${YARD}/changes.csv`]: 'changes:read',
 	[`GET ${YARD}/people`]: 'people:read',
 	[`GET ${YARD}/people.csv`]: 'people:read'
 };
