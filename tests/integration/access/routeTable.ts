@@ -221,6 +221,7 @@ export const ROUTES: Readonly<Record<string, Row>> = {
 	'GET /api/v1/health': OPEN,
 
 	'GET /api/v1/openapi.json': OPEN,
+	'GET /schemas/sheet-1.json': OPEN,
 	'POST /api/v1/outlook': EMPTY_FORM,
 	'POST /api/v1/yards/[slug]/forecast': OF_YARD,
 	'GET /api/v1/yards/[slug]/hours': OF_YARD,
