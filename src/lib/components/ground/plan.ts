@@ -36,7 +36,7 @@ export function placed<Stand extends PlanStand>(
 	return stands.map((stand) =>
 		isDrawn(stand)
 			? { ...stand, isPlaced: true }
-			: { ...stand, x: 6 + waiting++ * 9, y: 8, isPlaced: false }
+			: { ...stand, x: 12 + waiting++ * 18, y: 6, isPlaced: false }
 	);
 }
 
