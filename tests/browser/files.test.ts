@@ -18,8 +18,8 @@ test('an owner adds a photo to a boat and sees it; to another owner it is not th
 	await signIn(page, 'owner');
 	await page.goto(`${YARD_PATH}/boats`);
 	await page.getByRole('link', { name: OWN_BOAT }).click();
-	await page.getByLabel('caption').fill(caption);
-	await page.getByLabel('photos and PDFs').setInputFiles([photo, renamed]);
+	await page.getByLabel('caption', { exact: true }).fill(caption);
+	await page.getByLabel('photos and PDFs', { exact: true }).setInputFiles([photo, renamed]);
 	await page.getByRole('button', { name: 'Add', exact: true }).click();
 	await expect(page.getByText(/keel\.jpg is a program for Windows/).last()).toBeVisible();
 	const small = page.getByRole('img', { name: caption });
@@ -40,8 +40,8 @@ test('an owner adds a photo to a boat and sees it; to another owner it is not th
 	await signIn(manager, 'manager');
 	await manager.goto(`${YARD_PATH}/boats`);
 	await manager.getByRole('link', { name: FOREIGN_BOAT }).click();
-	await manager.getByLabel('caption').fill(caption);
-	await manager.getByLabel('photos and PDFs').setInputFiles(photo);
+	await manager.getByLabel('caption', { exact: true }).fill(caption);
+	await manager.getByLabel('photos and PDFs', { exact: true }).setInputFiles(photo);
 	await manager.getByRole('button', { name: 'Add', exact: true }).click();
 	const theirs = manager.getByRole('img', { name: caption });
 	await expect(theirs).toBeVisible();
@@ -70,14 +70,14 @@ test('without scripts a form adds photos, says what it refused, and keeps the ca
 	await signIn(page, 'owner');
 	await page.goto(`${YARD_PATH}/boats`);
 	await page.getByRole('link', { name: OWN_BOAT }).click();
-	await page.getByLabel('caption').fill(caption);
-	await page.getByLabel('photos and PDFs').setInputFiles([
+	await page.getByLabel('caption', { exact: true }).fill(caption);
+	await page.getByLabel('photos and PDFs', { exact: true }).setInputFiles([
 		{ name: 'keel.jpg', mimeType: 'image/jpeg', buffer: program() },
 		{ name: 'hatch.jpg', mimeType: 'image/jpeg', buffer: await photoWithPlace() }
 	]);
 	await page.getByRole('button', { name: 'Add', exact: true }).click();
 	await expect(page.getByRole('alert')).toContainText('keel.jpg is a program for Windows');
-	await expect(page.getByLabel('caption')).toHaveValue(caption);
+	await expect(page.getByLabel('caption', { exact: true })).toHaveValue(caption);
 	await expect(page.getByRole('img', { name: caption })).toBeVisible();
 	await page.getByText(`Delete ${caption}`).click();
 	await page.getByRole('button', { name: `Delete ${caption} for good` }).click();
