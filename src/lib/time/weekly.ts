@@ -31,25 +31,38 @@ function weekSpans(hours: WorkHours): Span[] {
 					];
 		})
 	);
-	return spans.sort((a, b) => a.from - b.from);
+	return joined(spans.sort((a, b) => a.from - b.from));
 }
 
-/** Spans cut at each midnight, as weekly hours. A day to its end is written as to 00:00. */
+/** Spans in order with those that meet made one. */
+function joined(spans: readonly Span[]): Span[] {
+	const whole: { from: number; to: number }[] = [];
+	for (const { from, to } of spans) {
+		const last = whole.at(-1);
+		if (last !== undefined && from <= last.to) last.to = Math.max(last.to, to);
+		else whole.push({ from, to });
+	}
+	return whole;
+}
+
+/**
+ * Spans cut at each midnight, as weekly hours, days of the same hours together. A day to its end is
+ * written as to 00:00.
+ */
 function weeklyOf(spans: readonly Span[]): WorkHours {
-	return spans.flatMap(({ from, to }) => {
-		const days: WorkHours = [];
+	const hours: WorkHours = [];
+	for (const { from, to } of spans) {
 		for (let start = from; start < to;) {
 			const day = Math.floor(start / DAY);
 			const end = Math.min(to, (day + 1) * DAY);
-			days.push({
-				days: [day + 1],
-				from: timeOf(start - day * DAY),
-				to: timeOf((end - day * DAY) % DAY)
-			});
+			const [first, last] = [timeOf(start - day * DAY), timeOf((end - day * DAY) % DAY)];
+			const same = hours.find((it) => it.from === first && it.to === last);
+			if (same === undefined) hours.push({ days: [day + 1], from: first, to: last });
+			else same.days.push(day + 1);
 			start = end;
 		}
-		return days;
-	});
+	}
+	return hours;
 }
 
 /** Weekly hours that lie inside both; empty where none do. */

@@ -173,6 +173,14 @@ export const ROUTES: Readonly<Record<string, Row>> = {
 	'action answer /[yard]/jobs/[job]': BOAT_ASKED_WRONGLY,
 	'load /[yard]/jobs/[job]/steps/[step]': OF_BOAT,
 	'action default /[yard]/jobs/[job]/steps/[step]': BOAT_ASKED_WRONGLY,
+	'load /[yard]/settings/times': OF_YARD,
+	'action hours /[yard]/settings/times': OF_YARD,
+	'action yardHours /[yard]/settings/times': OF_YARD,
+	'action absence /[yard]/settings/times': {
+		...OF_YARD,
+		own: everyRole('asked wrongly')
+	},
+	'action remove /[yard]/settings/times': OF_YARD,
 	'load /[yard]/settings/people': OF_WHO_ASKS,
 	'action invite /[yard]/settings/people': {
 		...OF_WHO_ASKS,

@@ -4,7 +4,7 @@ import { readTimeOfDay } from '../../time/timeOfDay';
 import { rowsOf, type SettingsReading } from './settingsForm';
 
 /** The hours of a week as a form holds them: `name-day-span-from` and `-to`. */
-function readWeek(
+export function readWeek(
 	form: FormData,
 	name: string
 ): DaySpan[][] | { readonly errors: Record<string, string> } {
