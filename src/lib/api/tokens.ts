@@ -8,16 +8,12 @@ export const SCOPES = [
 	'boats:write',
 	'jobs:read',
 	'jobs:write',
-	'sheets:read',
-	'sheets:write',
 	'files:read',
 	'files:write',
 	'people:read',
-	'people:write',
 	'settings:read',
 	'settings:write',
-	'changes:read',
-	'yard:export'
+	'changes:read'
 ] as const;
 export type Scope = (typeof SCOPES)[number];
 

@@ -74,6 +74,10 @@ describe('what a token opens', () => {
 		}
 	});
 
+	test('every scope that can be ticked opens something', () => {
+		expect(SCOPES.filter((scope) => !Object.values(ROUTE_SCOPES).includes(scope))).toEqual([]);
+	});
+
 	test('a method that says no scope takes no token, whatever it holds', async () => {
 		const token = await made(SCOPES);
 		const { status } = await ask('PUT /api/v1/yards/[slug]/unheard-of', `Bearer ${token}`);

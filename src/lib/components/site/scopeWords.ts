@@ -7,14 +7,10 @@ export const SCOPE_WORDS: Readonly<Record<Scope, string>> = {
 	'boats:write': 'add and change boats',
 	'jobs:read': 'read jobs and steps',
 	'jobs:write': 'queue and change jobs and steps',
-	'sheets:read': 'read sheets',
-	'sheets:write': 'add and change sheets',
 	'files:read': 'read photos and PDFs',
 	'files:write': 'add and delete photos and PDFs',
 	'people:read': 'read who belongs to a yard',
-	'people:write': 'ask people to a yard',
 	'settings:read': 'read settings and stands',
 	'settings:write': 'change settings and stands',
-	'changes:read': 'read who changed what',
-	'yard:export': 'take a whole yard out'
+	'changes:read': 'read who changed what'
 };
