@@ -144,8 +144,12 @@ describe('a forgotten passphrase', () => {
 		const [{ id }] = await database.db.select().from(users).where(eq(users.email, email));
 		await sessions.create(id);
 		await askToReset(web.db, email, ORIGIN);
+		const { token: earlier } = await letter();
+		await database.db.delete(mails);
+		await askToReset(web.db, email, ORIGIN);
 		const { token } = await letter();
 		expect(await resetPassphrase(web.db, sessions, token, PASSPHRASE)).toBe(id);
+		expect(await resetPassphrase(web.db, sessions, earlier, 'another')).toBeNull();
 		expect(await resetPassphrase(web.db, sessions, token, 'again')).toBeNull();
 		const left = await database.db.select().from(sessionRows).where(eq(sessionRows.userId, id));
 		expect(left).toEqual([]);
@@ -284,6 +288,20 @@ describe('devices', () => {
 		expect(await sessions.devicesOf(id, here.value)).toHaveLength(2);
 		await sessions.endDevice(id, other?.id ?? '');
 		expect(await sessions.devicesOf(id, here.value)).toHaveLength(1);
+	});
+
+	test('all others can be ended at once, and nobody else’s', async () => {
+		const idOf = async (role: 'manager' | 'painter') =>
+			(await database.db.select().from(users).where(eq(users.email, DEMO_PEOPLE[role].email)))[0]
+				.id;
+		const [id, neighbour] = [await idOf('manager'), await idOf('painter')];
+		const here = await sessions.create(id);
+		await sessions.create(id);
+		const theirs = await sessions.create(neighbour);
+		await sessions.endOthers(id, here.value);
+		const left = await sessions.devicesOf(id, here.value);
+		expect(left.map(({ isThis }) => isThis)).toEqual([true]);
+		expect((await sessions.validate(theirs.value)).user?.id).toBe(neighbour);
 	});
 
 	test('sign in again after ninety days, however often they came', async () => {

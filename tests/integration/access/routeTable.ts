@@ -118,6 +118,7 @@ export const ROUTES: Readonly<Record<string, Row>> = {
 	'action passphrase /(site)/you': { ...OWN_ACCOUNT, own: everyRole('asked wrongly') },
 	'action makeToken /(site)/you': { ...OWN_ACCOUNT, own: everyRole('asked wrongly') },
 	'action withdrawToken /(site)/you': { ...OWN_ACCOUNT, own: everyRole('moved on') },
+	'action endOthers /(site)/you': { ...OWN_ACCOUNT, own: everyRole('moved on') },
 	'action endDevice /(site)/you': { ...OWN_ACCOUNT, own: everyRole('moved on') },
 	// Leads to sign-in whoever asks: there is nothing to refuse.
 	'POST /(site)/sign-out': { ...OPEN, signedOut: 'sign in', own: everyRole('sign in') },

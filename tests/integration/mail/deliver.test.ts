@@ -1,7 +1,7 @@
 import { eq, sql } from 'drizzle-orm';
 import { afterAll, beforeAll, beforeEach, expect, test } from 'vitest';
 import { mails, type Mail } from '../../../src/lib/server/db/schema';
-import { deliverDue, pauseAfter } from '../../../src/lib/server/mail/deliver';
+import { deliverDue, emptyAbandoned, pauseAfter } from '../../../src/lib/server/mail/deliver';
 import { post } from '../../../src/lib/server/mail/outbox';
 import { createTestDatabase } from '../../setup/database';
 
@@ -58,7 +58,9 @@ test('a mail refused for good is not tried again, and the others go on', async (
 	await write('b@marram.example');
 	const done = await deliverDue(database.db, ({ recipient }) =>
 		recipient.startsWith('nobody')
-			? Promise.reject(Object.assign(new Error('550 no such mailbox'), { responseCode: 550 }))
+			? Promise.reject(
+					Object.assign(new Error('550 no such mailbox'), { responseCode: 550, command: 'RCPT TO' })
+				)
 			: Promise.resolve()
 	);
 	expect(done).toEqual({ sent: 1, failed: 1 });
@@ -68,7 +70,27 @@ test('a mail refused for good is not tried again, and the others go on', async (
 		.select()
 		.from(mails)
 		.where(eq(mails.recipient, 'nobody@marram.example'));
-	expect(refused).toMatchObject({ sentAt: null, lastError: '550 no such mailbox' });
+	expect(refused).toMatchObject({ sentAt: null, lastError: '550 no such mailbox', text: '' });
+});
+
+test('a login that the server refuses is ours to put right: the letter waits', async () => {
+	await write('c@marram.example');
+	const badLogin = () =>
+		Promise.reject(
+			Object.assign(new Error('535 bad login'), { responseCode: 535, command: 'AUTH PLAIN' })
+		);
+	await deliverDue(database.db, badLogin);
+	await database.db.update(mails).set({ nextTryAt: sql`now()` });
+	expect(await deliverDue(database.db, () => Promise.resolve())).toEqual({ sent: 1, failed: 0 });
+});
+
+test('a letter whose last worker never came back is emptied, one that may be sent is not', async () => {
+	await write('d@marram.example');
+	await emptyAbandoned(database.db);
+	expect((await kept())[0].text).toContain('/found/secret');
+	await database.db.update(mails).set({ attempts: 12 });
+	await emptyAbandoned(database.db);
+	expect((await kept())[0]).toMatchObject({ text: '', html: '', sentAt: null });
 });
 
 test('workers at once take each mail once, and hold nothing while they send', async () => {

@@ -1,9 +1,9 @@
 import { eq, sql } from 'drizzle-orm';
 import { inAccounts } from '../db/accountsWork';
 import type { Database } from '../db/client';
-import { users } from '../db/schema';
+import { accessTokens, accountLinks, users } from '../db/schema';
 import { resetLetter } from '../mail/letters';
-import { post } from '../mail/outbox';
+import { post, type Writer } from '../mail/outbox';
 import { createLink, followLink } from './links';
 import { hashPassword, verifyPassword } from './passwords';
 import type { Sessions } from './sessions';
@@ -38,7 +38,8 @@ export async function askToReset(db: Database, email: string, origin: string): P
 }
 
 /**
- * Sets a new passphrase by a mailed link and ends every session of the person, whoever held them.
+ * Sets a new passphrase by a mailed link and ends what others may have opened: every session, every
+ * token, every other link of the person.
  *
  * @returns the person, or null where the link is over
  */
@@ -53,10 +54,17 @@ export async function resetPassphrase(
 		const link = await followLink(tx, token, 'resetPassphrase');
 		if (link?.userId == null) return null;
 		await tx.update(users).set({ passwordHash }).where(eq(users.id, link.userId));
+		await forgetOpeners(tx, link.userId);
 		return link.userId;
 	});
 	if (userId !== null) await sessions.endAllOf(userId);
 	return userId;
+}
+
+/** Other links that would set a passphrase, and tokens: made while another may have known it. */
+async function forgetOpeners(db: Writer, userId: string): Promise<void> {
+	await db.delete(accountLinks).where(eq(accountLinks.userId, userId));
+	await db.delete(accessTokens).where(eq(accessTokens.userId, userId));
 }
 
 /** Guesses at the passphrase of a session that somebody found open. */
@@ -82,7 +90,7 @@ export async function showPassphrase(
 	return 'right';
 }
 
-/** Changes a passphrase that is known, where it is the one given, and ends every session. */
+/** Changes a passphrase that is known, where it is the one given, and ends every session; tokens stay. */
 export async function changePassphrase(
 	db: Database,
 	sessions: Sessions,

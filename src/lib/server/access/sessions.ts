@@ -1,6 +1,6 @@
 import { DrizzlePostgreSQLAdapter } from '@lucia-auth/adapter-drizzle';
 import { createHash } from 'node:crypto';
-import { and, desc, eq, gt } from 'drizzle-orm';
+import { and, desc, eq, gt, ne } from 'drizzle-orm';
 import { Lucia, TimeSpan, type Adapter, type DatabaseSession } from 'lucia';
 import { onBehalfOf, onDuty } from '../db/behalf';
 import type { Database } from '../db/client';
@@ -170,6 +170,12 @@ export function createSessions(db: Database, { secure }: { secure: boolean }) {
 		async endDevice(userId: string, id: string): Promise<void> {
 			await onBehalfOf(userId, () =>
 				db.delete(sessions).where(and(eq(sessions.userId, userId), eq(sessions.id, id)))
+			);
+		},
+		/** Ends every session of a person but the one of a token. */
+		async endOthers(userId: string, token: string): Promise<void> {
+			await onBehalfOf(userId, () =>
+				db.delete(sessions).where(and(eq(sessions.userId, userId), ne(sessions.id, hashed(token))))
 			);
 		},
 		end: (token: string): Promise<void> => onDuty('accounts', () => lucia.invalidateSession(token)),

@@ -1,4 +1,4 @@
-import { and, asc, eq, inArray, isNull, lt, lte, sql } from 'drizzle-orm';
+import { and, asc, eq, gte, inArray, isNull, lt, lte, sql } from 'drizzle-orm';
 import { createTransport } from 'nodemailer';
 import type { Database } from '../db/client';
 import { mails, type Mail } from '../db/schema';
@@ -53,18 +53,28 @@ async function takeDue(db: Database): Promise<Mail | null> {
 		.update(mails)
 		.set({
 			attempts: sql`${mails.attempts} + 1`,
-			nextTryAt: sql`now() + make_interval(mins => ${LEASE_MINUTES})`
+			nextTryAt: sql`now() + make_interval(mins => ${LEASE_MINUTES})`,
+			// Stands there for whoever looks after a worker that never came back.
+			lastError: 'A worker took it and has not said what came of it.'
 		})
 		.where(inArray(mails.id, next))
 		.returning();
 	return mail ?? null;
 }
 
+/** What of a mail a server refuses for good; a refused login or sender is ours to put right. */
+const REFUSALS: readonly unknown[] = ['RCPT TO', 'DATA'];
+
 /** Whether a mail server has said that it will never take this mail. */
 function isForGood(error: unknown): boolean {
-	const code = error instanceof Error && 'responseCode' in error ? error.responseCode : null;
-	return typeof code === 'number' && code >= 500 && code < 600;
+	if (!(error instanceof Error) || !('responseCode' in error) || !('command' in error))
+		return false;
+	const { responseCode: code, command } = error;
+	return typeof code === 'number' && code >= 500 && code < 600 && REFUSALS.includes(command);
 }
+
+/** What a letter keeps that nobody will send any more: nothing that opens anything. */
+const EMPTIED = { text: '', html: '' };
 
 async function noteFailure(db: Database, mail: Mail, error: unknown): Promise<void> {
 	const attempts = isForGood(error) ? MOST_ATTEMPTS : mail.attempts;
@@ -72,6 +82,7 @@ async function noteFailure(db: Database, mail: Mail, error: unknown): Promise<vo
 		.update(mails)
 		.set({
 			attempts,
+			...(attempts >= MOST_ATTEMPTS ? EMPTIED : {}),
 			nextTryAt: sql`now() + make_interval(secs => ${pauseAfter(mail.attempts)})`,
 			lastError: error instanceof Error ? error.message.slice(0, 500) : 'unknown'
 		})
@@ -103,9 +114,23 @@ export async function deliverDue(
 		}
 		await db
 			.update(mails)
-			.set({ sentAt: sql`now()`, lastError: null, text: '', html: '' })
+			.set({ sentAt: sql`now()`, lastError: null, ...EMPTIED })
 			.where(eq(mails.id, mail.id));
 		sent++;
 	}
 	return { sent, failed };
+}
+
+/** Empties letters whose last worker never came back: nobody sends them any more. */
+export async function emptyAbandoned(db: Database): Promise<void> {
+	await db
+		.update(mails)
+		.set(EMPTIED)
+		.where(
+			and(
+				isNull(mails.sentAt),
+				gte(mails.attempts, MOST_ATTEMPTS),
+				lte(mails.nextTryAt, sql`now()`)
+			)
+		);
 }

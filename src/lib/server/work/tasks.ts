@@ -9,7 +9,7 @@ import { allYards, yardById } from '../db/yards';
 import { currentForecast } from '../forecast/current';
 import { sweepFiles } from '../files/sweep';
 import { refreshForecast } from '../forecast/refresh';
-import { deliverDue, smtpSender } from '../mail/deliver';
+import { deliverDue, emptyAbandoned, smtpSender } from '../mail/deliver';
 import { computeOutlook, weatherOnAxis } from '../outlook/compute';
 import { refreshOffsetSeconds } from './spread';
 
@@ -89,6 +89,7 @@ export function createTasks({ db, config, log, sessions, storage }: Parts): Task
 			await forgetHoursBefore(db, new Date(Date.now() - KEEP_HOURS_MS));
 			await sessions.deleteExpired();
 			await forgetOldLinks(db);
+			await emptyAbandoned(db);
 		}
 	};
 }

@@ -16,7 +16,7 @@ export const load: PageServerLoad = async ({ locals }) => {
 };
 
 export const actions: Actions = {
-	default: async ({ request, cookies, getClientAddress }) => {
+	default: async ({ request, cookies, locals, getClientAddress }) => {
 		const form = await request.formData();
 		const email = String(form.get('email') ?? '');
 		const parsed = signInSchema.safeParse({ email, password: form.get('password') });
@@ -33,6 +33,8 @@ export const actions: Actions = {
 			case 'refused':
 				return fail(400, { email, message: 'That e-mail and passphrase do not go together.' });
 			case 'signedIn': {
+				// Whoever was signed in here is so no more, on the server too.
+				if (locals.session !== null) await sessions.end(locals.session.id);
 				const cookie = await sessions.create(result.userId, request.headers.get('user-agent'));
 				cookies.set(cookie.name, cookie.value, cookie.attributes);
 				redirect(303, await homeOf(result.userId));

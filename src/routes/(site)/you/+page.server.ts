@@ -83,6 +83,12 @@ export const actions: Actions = {
 		if (id.success) await withdrawToken(parts().db, locals.user.id, id.data);
 		redirect(303, '/you');
 	},
+	endOthers: async ({ locals }) => {
+		const { user, session } = locals;
+		if (user === null) redirect(303, '/sign-in');
+		if (session !== null) await parts().sessions.endOthers(user.id, session.id);
+		redirect(303, '/you');
+	},
 	endDevice: async ({ locals, request }) => {
 		if (locals.user === null) redirect(303, '/sign-in');
 		const form = await request.formData();
