@@ -153,6 +153,7 @@ export async function startStack({
 			accounts,
 			databaseUrl,
 			adminUrl: cluster.url,
+			webUrl,
 			fakes: fakes.addresses,
 			death,
 			stop

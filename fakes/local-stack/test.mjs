@@ -82,7 +82,12 @@ async function main() {
 				['run', '--reporter=default', '--reporter=json', `--outputFile.json=${vitestReport}`],
 				vitestReport,
 				countVitest,
-				{ TEST_DATABASE_URL: stack.adminUrl, STACK_DATA_DIR: dataFolder }
+				{
+					TEST_DATABASE_URL: stack.adminUrl,
+					// The role is the whole server's: tests that let it in keep the password of the stack.
+					TEST_WEB_PASSWORD: new URL(stack.webUrl).password,
+					STACK_DATA_DIR: dataFolder
+				}
 			)
 		);
 		const browserReport = join(dataFolder, 'playwright.json');

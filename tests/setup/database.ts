@@ -6,7 +6,8 @@ import { createDatabase } from '../../src/lib/server/db/client';
 const TEMPLATE = 'yardglass_template';
 /** Any number: held while the template is made, so that test files running at once make it once. */
 const TEMPLATE_LOCK = 7_302_116;
-const WEB_PASSWORD = 'of the tests alone';
+/** The role belongs to the whole server: beside a running stack it keeps that one's password. */
+const WEB_PASSWORD = process.env.TEST_WEB_PASSWORD ?? 'of the tests alone';
 
 function adminUrl(): string {
 	const url = process.env.TEST_DATABASE_URL;

@@ -103,3 +103,8 @@ export const jobSchema = z.object({
 	steps: z.array(jobStepSchema)
 });
 export type JobView = z.infer<typeof jobSchema>;
+
+/** The jobs of a boat, in order. */
+export const jobNamesSchema = z.object({
+	jobs: z.array(named.extend({ revision: z.int() }))
+});

@@ -182,6 +182,23 @@ export const ROUTES: Readonly<Record<string, Row>> = {
 		own: everyRole('asked wrongly')
 	},
 	'action remove /[yard]/settings/times': OF_YARD,
+	'GET /api/v1/yards/[slug]/boats/[boat]/jobs': OF_BOAT,
+	'POST /api/v1/yards/[slug]/boats/[boat]/jobs': BOAT_ASKED_WRONGLY,
+	'PUT /api/v1/yards/[slug]/boats/[boat]/jobs': BOAT_ASKED_WRONGLY,
+	'GET /api/v1/yards/[slug]/jobs/[job]': OF_BOAT,
+	'PATCH /api/v1/yards/[slug]/jobs/[job]': BOAT_ASKED_WRONGLY,
+	'PUT /api/v1/yards/[slug]/jobs/[job]/order': BOAT_ASKED_WRONGLY,
+	'POST /api/v1/yards/[slug]/jobs/[job]/steps': BOAT_ASKED_WRONGLY,
+	'PUT /api/v1/yards/[slug]/steps/[step]': BOAT_ASKED_WRONGLY,
+	'PUT /api/v1/yards/[slug]/steps/[step]/state': BOAT_ASKED_WRONGLY,
+	'GET /api/v1/yards/[slug]/jobs/[job]/plans': OF_BOAT,
+	'POST /api/v1/yards/[slug]/jobs/[job]/plans': OF_WHO_PLANS_ASKED_WRONGLY,
+	'DELETE /api/v1/yards/[slug]/jobs/[job]/plans': {
+		...OF_WHO_PLANS,
+		own: { manager: 'not found', painter: 'not allowed', owner: 'not found' },
+		otherBoat: { manager: 'not found', painter: 'not found', owner: 'not found' }
+	},
+	'PUT /api/v1/yards/[slug]/jobs/[job]/plan/answer': BOAT_ASKED_WRONGLY,
 	'load /[yard]/settings/people': OF_WHO_ASKS,
 	'action invite /[yard]/settings/people': {
 		...OF_WHO_ASKS,

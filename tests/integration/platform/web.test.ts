@@ -52,9 +52,9 @@ describe('health', () => {
 
 	beforeAll(async () => {
 		database = await createTestDatabase();
-		way = new Way(new URL(database.url));
+		way = new Way(new URL(database.webUrl));
 		wayPort = await way.open();
-		const url = new URL(database.url);
+		const url = new URL(database.webUrl);
 		url.port = String(wayPort);
 		const port = await freePort();
 		origin = `http://127.0.0.1:${port}`;

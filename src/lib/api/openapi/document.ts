@@ -1,6 +1,7 @@
 import { filesPart } from './files';
 import { forecastPart } from './forecast';
 import { hoursPart } from './hours';
+import { jobsPart } from './jobs';
 import { installationPart } from './installation';
 import { listsPart } from './lists';
 import { outlookPart } from './outlook';
@@ -15,6 +16,7 @@ const PARTS: readonly Part[] = [
 	hoursPart,
 	forecastPart,
 	yardPart,
+	jobsPart,
 	filesPart,
 	listsPart,
 	installationPart

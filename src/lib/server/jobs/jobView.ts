@@ -85,3 +85,12 @@ export function jobsBeside(db: Database, boatId: string, jobId: string) {
 		.where(and(eq(jobs.boatId, boatId), ne(jobs.id, jobId)))
 		.orderBy(asc(jobs.position));
 }
+
+/** The jobs of a boat by name, in order. */
+export function jobNames(db: Database, boatId: string) {
+	return db
+		.select({ id: jobs.id, name: jobs.name, revision: jobs.revision })
+		.from(jobs)
+		.where(eq(jobs.boatId, boatId))
+		.orderBy(asc(jobs.position));
+}

@@ -84,6 +84,26 @@ export function queueJob(
 	});
 }
 
+/** Puts an empty job behind what is queued on a boat; its steps are added one by one. */
+export function addJob(
+	db: Database,
+	boatId: string,
+	name: string
+): Promise<{ readonly outcome: 'queued'; readonly jobId: string }> {
+	return db.transaction(async (tx) => {
+		await lockQueue(tx, boatId);
+		const [{ last }] = await tx
+			.select({ last: max(jobs.position) })
+			.from(jobs)
+			.where(eq(jobs.boatId, boatId));
+		const [{ id }] = await tx
+			.insert(jobs)
+			.values({ boatId, name, position: (last ?? -1) + 1 })
+			.returning({ id: jobs.id });
+		return { outcome: 'queued', jobId: id };
+	});
+}
+
 /** The jobs of a boat with their steps, in order. */
 export async function jobsOfBoat(db: Database, boatId: string) {
 	return db
