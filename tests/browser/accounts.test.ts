@@ -83,7 +83,9 @@ test('wrong places are told at their fields, and nothing typed is lost', async (
 	await page.getByLabel('e-mail').fill('juno@marram.example');
 	await page.getByRole('button', { name: 'Send me the letter' }).click();
 	await expect(page.getByText('Type degrees, or degrees and minutes')).toBeVisible();
-	await expect(page.getByText('Type degrees from −180 to 180')).toBeVisible();
+	await expect(
+		page.getByText('A longitude lies between 0 and 180°, and this is 200°.')
+	).toBeVisible();
 	await expect(page.getByLabel('name of the yard')).toHaveValue('Tern Slip');
 	await expect(page.getByLabel('latitude')).toHaveAttribute('aria-invalid', 'true');
 });

@@ -198,7 +198,8 @@ test.describe('the Hours page on a phone', () => {
 	test('a tap opens the reading over the whole screen', async ({ page }) => {
 		await signIn(page, 'manager');
 		const batten = battens(page).first();
-		await batten.scrollIntoViewIfNeeded();
+		// Clear of the places at the foot, which lie over the page.
+		await batten.evaluate((it) => it.scrollIntoView({ block: 'center' }));
 		const box = await batten.boundingBox();
 		if (!box) throw new Error('the batten is nowhere');
 		await page.touchscreen.tap(200, box.y + box.height / 2);
