@@ -4,6 +4,17 @@ import { signIn, YARD_PATH } from './accounts';
 
 test.describe.configure({ timeout: 120_000 });
 
+/** Boats of these tests, taken away again: other tests count what the demo yard has queued. */
+const made: string[] = [];
+test.afterEach(async ({ page }) => {
+	for (const boat of made.splice(0)) {
+		const address = `/api/v1/yards${YARD_PATH}/boats/${boat}`;
+		const { revision } = await (await page.request.get(address)).json();
+		const answer = await page.request.delete(`${address}?revision=${revision}&settled=true`);
+		expect(answer.status()).toBe(204);
+	}
+});
+
 /** A job of a boat of this test's own, with a usual job queued on it. */
 async function ownJob(page: Page): Promise<void> {
 	await signIn(page, 'manager');
@@ -12,6 +23,7 @@ async function ownJob(page: Page): Promise<void> {
 	await page.getByLabel('heading of the bow').fill('90');
 	await page.getByRole('button', { name: 'Add the boat' }).click();
 	await expect(page).toHaveURL(/\/boats\/[0-9a-f-]{36}$/);
+	made.push(page.url().slice(-36));
 	await page
 		.getByLabel('job', { exact: true })
 		.selectOption({ label: 'Antifouling for the season' });
@@ -59,11 +71,13 @@ test('steps are put in another order with the keyboard, and by dragging', async 
 
 test('a plan is taken, says who took it, and is let go', async ({ page }) => {
 	await ownJob(page);
-	await page.getByRole('button', { name: 'Take this plan: Soonest' }).click();
-	await expect(page.getByRole('heading', { name: 'The plan in force' })).toBeVisible();
+	await page.getByRole('button', { name: /^Take this plan ?: Soonest$/ }).click();
+	await expect(page.getByRole('heading', { name: 'The plan in force', exact: true })).toBeVisible();
 	await expect(page.getByText(/Soonest, taken by Ilse Marrow/)).toBeVisible();
 	await page.getByRole('button', { name: 'Let this plan go' }).click();
-	await expect(page.getByRole('heading', { name: 'The plan in force' })).toHaveCount(0);
+	await expect(page.getByRole('heading', { name: 'The plan in force', exact: true })).toHaveCount(
+		0
+	);
 });
 
 test('a step’s form says at its field what is wrong and keeps what was typed', async ({ page }) => {
@@ -74,14 +88,15 @@ test('a step’s form says at its field what is wrong and keeps what was typed',
 	await page.getByRole('button', { name: 'Add the step' }).click();
 	await expect(page.getByText('Type how many hours the work takes')).toBeVisible();
 	await expect(page.getByText('Choose at least one face.')).toBeVisible();
-	await expect(page.getByText('Choose the sheet of what is laid')).toBeVisible();
 	await expect(page.getByLabel('name', { exact: true })).toHaveValue('barrier, thick');
 	await page.getByLabel('hours of work').fill('2,5');
-	await page.getByLabel('sheet of what is laid').selectOption({ index: 3 });
 	await page.getByLabel('starboard bottom').check();
 	await page.getByRole('button', { name: 'Add the step' }).click();
-	await expect(page.getByText('barrier, thick')).toBeVisible();
-	await expect(page.getByText('2.5 h')).toBeVisible();
+	await expect(page.getByText('Choose the sheet of what is laid')).toBeVisible();
+	await page.getByLabel('sheet of what is laid').selectOption({ index: 3 });
+	await page.getByRole('button', { name: 'Add the step' }).click();
+	await expect(page.getByText('barrier, thick', { exact: true }).first()).toBeVisible();
+	await expect(page.getByText(/^2.5 h/)).toBeVisible();
 });
 
 test('what another changed meanwhile is told, and nothing is written over', async ({

@@ -91,7 +91,13 @@ for (const [screen, use] of Object.entries(SCREENS)) {
 				await held.letGo();
 				await expect(battens(page)).toHaveCount(steps);
 				await expect(page.getByRole('status')).toContainText(/oday|omorrow/);
-				expect(await placesOf(rows(page))).toEqual(before);
+				const after = await placesOf(rows(page));
+				expect(after).toHaveLength(before.length);
+				// The italic of a boat's name raises its line by a fifth of a pixel: less than half is no move.
+				after.forEach((place, i) => {
+					for (const side of ['x', 'y', 'width', 'height'] as const)
+						expect(Math.abs(place[side] - before[i][side]), `${side} of ${i}`).toBeLessThan(0.5);
+				});
 				await expect(page.locator('.board')).toHaveAttribute('aria-busy', 'false');
 			} finally {
 				await held.letGo().catch(() => undefined);
