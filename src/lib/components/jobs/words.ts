@@ -2,14 +2,6 @@ import type { StepState } from '$lib/api/jobs';
 import type { PlanAim } from '$lib/api/plans';
 import type { Method, ShelterName, StepKind, TaskCode } from '$lib/engine';
 
-export const STATE_WORDS: Readonly<Record<StepState, string>> = {
-	queued: 'queued',
-	underWay: 'under way',
-	curing: 'curing',
-	done: 'done',
-	dropped: 'dropped'
-};
-
 /** What the button says that takes a step from one state to another. */
 export function moveWords(from: StepState, to: StepState): string {
 	if (to === 'queued') return from === 'dropped' ? 'Take it back' : 'Not begun after all';

@@ -1,6 +1,7 @@
 import { eq } from 'drizzle-orm';
 import type { StepMove, StepState } from '../../api/jobs';
 import { taskOf, WET_STEP_KINDS, type StepKind, type TaskCode } from '../../engine';
+import { STATE_WORDS } from '../../sentences/stepStates';
 import { mayDo, type Membership } from '../access/roles';
 import { changeRow } from '../db/changeRow';
 import type { Database } from '../db/client';
@@ -89,11 +90,3 @@ export function moveStep(
 		return changed.outcome === 'changed' ? { outcome: 'done' } : changed;
 	});
 }
-
-export const STATE_WORDS: Readonly<Record<StepState, string>> = {
-	queued: 'queued',
-	underWay: 'under way',
-	curing: 'curing',
-	done: 'done',
-	dropped: 'dropped'
-};
